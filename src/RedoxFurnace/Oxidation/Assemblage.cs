@@ -1,0 +1,31 @@
+using System.Collections.Immutable;
+using RedoxFurnace.Substances;
+
+namespace RedoxFurnace.Oxidation;
+
+/// <summary>Phases that together hold the metals of a system in their fixed proportions: one oxide, or a metal beside an oxide.</summary>
+public sealed class Assemblage
+{
+    internal Assemblage(ImmutableArray<(Substance Substance, double Amount)> parts)
+    {
+        Parts = parts;
+        Oxygen = parts.Sum(part => part.Amount * part.Substance.Formula.Of("O"));
+        Id = string.Join(" + ", parts.Select(part => part.Substance.Id));
+        PhaseNames = string.Join(" + ", parts.Select(part => part.Substance.Group ?? part.Substance.Id));
+    }
+
+    /// <summary>Substances with moles per unit of the system.</summary>
+    public ImmutableArray<(Substance Substance, double Amount)> Parts { get; }
+
+    /// <summary>Moles of oxygen atoms per unit of the system.</summary>
+    public double Oxygen { get; }
+
+    /// <summary>Formulas joined by plus signs.</summary>
+    public string Id { get; }
+
+    /// <summary>Like <see cref="Id"/>, with members of one phase (wustite) under the name of the phase.</summary>
+    public string PhaseNames { get; }
+
+    /// <inheritdoc/>
+    public override string ToString() => Id;
+}
