@@ -9,10 +9,10 @@ public class WaterVapourTests
     private const double PascalPerMillimetreMercury = 133.322387415;
 
     /// <summary>Published rows that must agree.</summary>
-    public static TheoryData<string> Tested => CheckLedger.Tested("water vapour");
+    public static TheoryData<string> Tested => CheckLedger.Of("tested", "water vapour");
 
     /// <summary>Published rows known to disagree.</summary>
-    public static TheoryData<string> Misses => CheckLedger.Misses("water vapour");
+    public static TheoryData<string> Misses => CheckLedger.Of("miss", "water vapour");
 
     // Murphy and Koop 2005 equations 7 and 10, IAPWS R14-08(2011), IAPWS-IF97, WMO No. 8 (Goff-Gratch 1988), a hygrometer
     // maker's table and a handbook table: each row of the table names its own source.

@@ -24,6 +24,11 @@ internal sealed class PublishedTable
 
     public PublishedRow this[string id] => Rows.Single(row => row["id"] == id);
 
+    /// <summary>This table and another of the same columns.</summary>
+    public PublishedTable With(PublishedTable other) => Columns.SequenceEqual(other.Columns)
+        ? new PublishedTable(Name, Heading, Columns, [.. Rows, .. other.Rows])
+        : throw new InvalidDataException($"{Name} and {other.Name} have different columns");
+
     public static PublishedTable Load(string name)
     {
         string[] lines = File.ReadAllLines(Path.Combine(AppContext.BaseDirectory, "Published", name));

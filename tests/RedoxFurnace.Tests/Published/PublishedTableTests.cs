@@ -26,6 +26,8 @@ public class PublishedTableTests
     [Theory]
     [InlineData("safety-facts.csv", 90)]
     [InlineData("check-values.csv", 336)]
+    [InlineData("carbide-nitride-lines.csv", 41)]
+    [InlineData("measured-couples.csv", 70)]
     public void Every_table_is_headed_and_whole(string name, int rows)
     {
         PublishedTable table = PublishedTable.Load(name);
@@ -35,4 +37,21 @@ public class PublishedTableTests
         Assert.All(table.Rows, row => Assert.NotEqual("", row["source"]));
         Assert.All(table.Rows, row => Assert.Contains(row["provenance"], new[] { "memory", "retrieved" }));
     }
+
+    [Theory]
+    [InlineData("-1675100+313.2*T", 1000, -1361900)]
+    [InlineData("(2+3*T)*10-4/2", 1, 48)]
+    [InlineData("4.184*(-100+2*T)", 50, 0)]
+    [InlineData("-5*T*ln(T)+0.1*T^2", 1, 0.1)]
+    [InlineData("-26834.7/T+6.471", 1000, -20.3637)]
+    public void An_expression_is_evaluated_as_printed(string text, double kelvin, double expected) =>
+        Assert.Equal(expected, PublishedExpression.Evaluate(text, kelvin), 1e-9);
+
+    [Theory]
+    [InlineData("3+")]
+    [InlineData("(T")]
+    [InlineData("2*x")]
+    [InlineData("1-2)")]
+    public void What_is_no_expression_is_refused(string text) =>
+        Assert.Throws<InvalidDataException>(() => PublishedExpression.Evaluate(text, 300));
 }
