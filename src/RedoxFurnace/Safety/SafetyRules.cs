@@ -1,4 +1,4 @@
-using System.Reflection;
+using RedoxFurnace.Substances;
 
 namespace RedoxFurnace.Safety;
 
@@ -9,11 +9,11 @@ public sealed class SafetyRules
     public const string ClosingLine =
         "Site rules, local codes and licensed practitioners come first: this is a calculation, not an approval, and the list may not be complete.";
 
-    private const string ResourceName = "oxides/safety.yaml";
+    private const string FileName = "safety.yaml";
 
-    private static readonly Lazy<SafetyRules> LazyBundled = new(ReadBundled);
+    private static readonly Lazy<SafetyRules> LazyBundled = new(() => Of(SubstanceDatabase.Bundled));
 
-    internal SafetyRules(IReadOnlyList<SafetyRule> rules) => Rules = rules;
+    private SafetyRules(IReadOnlyList<SafetyRule> rules) => Rules = rules;
 
     /// <summary>The rules that come with the library, read at first use.</summary>
     public static SafetyRules Bundled => LazyBundled.Value;
@@ -25,12 +25,20 @@ public sealed class SafetyRules
     /// <param name="yamlText">The whole text of the file.</param>
     /// <param name="fileName">Its name, for messages only; nothing is opened.</param>
     /// <returns>The checked rules.</returns>
-    /// <exception cref="SafetyRulesException">The text is not a sound rules file; the message names file, line and column.</exception>
+    /// <exception cref="DocumentException">The text is not a sound rules file; the message names file, line and column.</exception>
     public static SafetyRules Parse(string yamlText, string fileName)
     {
         ArgumentNullException.ThrowIfNull(yamlText);
         ArgumentException.ThrowIfNullOrEmpty(fileName);
-        return new SafetyRules(new SafetyRulesReader(yamlText, fileName).Read());
+        return new SafetyRules(SafetyRulesReader.Read(DocumentNode.Parse(yamlText, fileName)));
+    }
+
+    /// <summary>The rules that go with a database: a user's own <c>safety.yaml</c> stands in place of the built-in one.</summary>
+    /// <exception cref="DocumentException">The file is not a sound rules file.</exception>
+    public static SafetyRules Of(SubstanceDatabase database)
+    {
+        ArgumentNullException.ThrowIfNull(database);
+        return new SafetyRules(SafetyRulesReader.Read(database.Document(FileName)));
     }
 
     /// <summary>The notes a context calls for, gravest first, then by id.</summary>
@@ -44,13 +52,5 @@ public sealed class SafetyRules
                 .ThenBy(rule => rule.Id, StringComparer.Ordinal)
                 .Select(rule => rule.ToNote()),
         ];
-    }
-
-    private static SafetyRules ReadBundled()
-    {
-        using Stream stream = Assembly.GetExecutingAssembly().GetManifestResourceStream(ResourceName)
-            ?? throw new InvalidOperationException($"The library was built without '{ResourceName}'.");
-        using StreamReader reader = new(stream);
-        return Parse(reader.ReadToEnd(), ResourceName);
     }
 }

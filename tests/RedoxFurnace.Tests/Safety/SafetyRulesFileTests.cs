@@ -1,4 +1,5 @@
 using RedoxFurnace.Safety;
+using RedoxFurnace.Substances;
 
 namespace RedoxFurnace.Tests.Safety;
 
@@ -27,26 +28,26 @@ public class SafetyRulesFileTests
 
     [Theory]
     [InlineData("severity: danger", "severty: danger", 3, 5, "unknown key 'severty'; did you mean 'severity'?")]
-    [InlineData("severity: danger", "severity: dangerous", 3, 15, "unknown severity 'dangerous'; did you mean 'danger'?")]
+    [InlineData("severity: danger", "severity: dangerous", 3, 15, "severity 'dangerous' is not allowed; did you mean 'danger'?")]
     [InlineData("id: hot-metal", "id: Hot Metal", 2, 9, "lower-case letters")]
-    [InlineData("    source: invented", "", 2, 5, "key 'source' is missing")]
-    [InlineData("[molten-metal]", "[molten-metall]", 5, 16, "unknown tag 'molten-metall'; did you mean 'molten-metal'?")]
-    [InlineData("tags: [molten-metal]", "above_c: warm", 5, 18, "found 'warm', expected a number")]
-    [InlineData("tags: [molten-metal]", "above_c: NaN", 5, 18, "found 'NaN', expected a number")]
+    [InlineData("    source: invented", "", 2, 5, "the key 'source' is missing")]
+    [InlineData("[molten-metal]", "[molten-metall]", 5, 16, "tag 'molten-metall' is not allowed; did you mean 'molten-metal'?")]
+    [InlineData("tags: [molten-metal]", "above_c: warm", 5, 18, "number 'warm' is not allowed")]
+    [InlineData("tags: [molten-metal]", "above_c: NaN", 5, 18, "number 'NaN' is not allowed")]
     [InlineData("- tags: [molten-metal]", "- {}", 5, 9, "an empty condition would always hold")]
-    [InlineData("text: Stand back.", "text: Stand back.\n    text: Run.", 7, 5, "key 'text' stands here a second time")]
-    [InlineData("text: Stand back.", "text: [a]", 6, 11, "found a list, expected a word")]
-    [InlineData("text: Stand back.", "text: &a Stand back.", 6, 11, "found an anchor")]
-    [InlineData("text: Stand back.", "text: *a", 6, 11, "found an alias")]
-    [InlineData("provenance: memory", "provenance: rumour", 8, 82, "unknown provenance 'rumour'")]
-    [InlineData("text: Stand back.", "text: \"Stand back.", 6, 11, "not readable as YAML")]
+    [InlineData("text: Stand back.", "text: Stand back.\n    text: Run.", 7, 5, "the key 'text' stands twice")]
+    [InlineData("text: Stand back.", "text: [a]", 6, 11, "expected a single value, found a list")]
+    [InlineData("text: Stand back.", "text: &a Stand back.", 6, 11, "anchors and aliases")]
+    [InlineData("text: Stand back.", "text: *a", 6, 11, "anchors and aliases")]
+    [InlineData("provenance: memory", "provenance: rumour", 8, 82, "provenance 'rumour' is not allowed")]
+    [InlineData("text: Stand back.", "text: \"Stand back.", 6, 11, "not well-formed YAML")]
     public void A_fault_is_named_with_its_place(string good, string bad, int line, int column, string message)
     {
-        SafetyRulesException fault = Assert.Throws<SafetyRulesException>(
+        DocumentException fault = Assert.Throws<DocumentException>(
             () => SafetyRules.Parse(Good.Replace(good, bad, StringComparison.Ordinal) + "\n", "mine.yaml"));
         Assert.Contains(message, fault.Message, StringComparison.Ordinal);
         Assert.StartsWith($"mine.yaml:{line}:{column}: ", fault.Message, StringComparison.Ordinal);
-        Assert.Equal(("mine.yaml", line, column), (fault.FileName, (int)fault.Line, (int)fault.Column));
+        Assert.Equal(("mine.yaml", line, column), (fault.At.File, (int)fault.At.Line, (int)fault.At.Column));
         Assert.DoesNotContain('\n', fault.Message);
     }
 
@@ -54,7 +55,7 @@ public class SafetyRulesFileTests
     public void The_same_id_twice_is_refused()
     {
         string twice = Good + "\n" + Good.Split('\n', 2)[1];
-        SafetyRulesException fault = Assert.Throws<SafetyRulesException>(() => SafetyRules.Parse(twice, "mine.yaml"));
+        DocumentException fault = Assert.Throws<DocumentException>(() => SafetyRules.Parse(twice, "mine.yaml"));
         Assert.StartsWith("mine.yaml:10:9: a rule 'hot-metal' stands above already", fault.Message, StringComparison.Ordinal);
     }
 
@@ -70,7 +71,7 @@ public class SafetyRulesFileTests
         string text = Good.Replace(first, first + "\n" + next, StringComparison.Ordinal);
         if (refused)
         {
-            SafetyRulesException fault = Assert.Throws<SafetyRulesException>(() => SafetyRules.Parse(text, "mine.yaml"));
+            DocumentException fault = Assert.Throws<DocumentException>(() => SafetyRules.Parse(text, "mine.yaml"));
             Assert.StartsWith("mine.yaml:9:9: 'distance'", fault.Message, StringComparison.Ordinal);
         }
         else
@@ -81,5 +82,12 @@ public class SafetyRulesFileTests
 
     [Fact]
     public void An_empty_file_is_refused() =>
-        Assert.StartsWith("mine.yaml:", Assert.Throws<SafetyRulesException>(() => SafetyRules.Parse("", "mine.yaml")).Message, StringComparison.Ordinal);
+        Assert.StartsWith("mine.yaml:", Assert.Throws<DocumentException>(() => SafetyRules.Parse("", "mine.yaml")).Message, StringComparison.Ordinal);
+
+    [Fact]
+    public void A_users_own_rules_stand_in_place_of_the_built_in_ones()
+    {
+        SubstanceDatabase database = SubstanceDatabase.WithOverlay([new DatabaseFile("safety.yaml", Good)]);
+        Assert.Equal("hot-metal", Assert.Single(SafetyRules.Of(database).Rules).Id);
+    }
 }
