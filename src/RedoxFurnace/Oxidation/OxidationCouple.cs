@@ -6,15 +6,15 @@ namespace RedoxFurnace.Oxidation;
 /// <summary>Two neighbours of a ladder and the reaction between them, always for one mole of O2.</summary>
 public sealed class OxidationCouple
 {
+    private readonly Substance _oxygen;
+    private Reaction? _formation;
+
     internal OxidationCouple(Assemblage reduced, Assemblage oxidised, Substance oxygen)
     {
         Reduced = reduced;
         Oxidised = oxidised;
         UnitsPerMoleO2 = 2 / (oxidised.Oxygen - reduced.Oxygen);
-        Formation = Reaction.Of(
-            reduced.Parts.Select(part => (part.Substance, -part.Amount * UnitsPerMoleO2))
-                .Append((oxygen, -1.0))
-                .Concat(oxidised.Parts.Select(part => (part.Substance, part.Amount * UnitsPerMoleO2))));
+        _oxygen = oxygen;
     }
 
     /// <summary>The side with less oxygen.</summary>
@@ -27,7 +27,10 @@ public sealed class OxidationCouple
     public double UnitsPerMoleO2 { get; }
 
     /// <summary>reduced + O2 = oxidised.</summary>
-    public Reaction Formation { get; }
+    public Reaction Formation => _formation ??= Reaction.Of(
+        Reduced.Parts.Select(part => (part.Substance, -part.Amount * UnitsPerMoleO2))
+            .Append((_oxygen, -1.0))
+            .Concat(Oxidised.Parts.Select(part => (part.Substance, part.Amount * UnitsPerMoleO2))));
 
     /// <summary>Name of the couple, for example <c>Fe/wustite</c>.</summary>
     public string Name => $"{Reduced.PhaseNames}/{Oxidised.PhaseNames}";

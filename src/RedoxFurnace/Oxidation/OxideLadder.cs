@@ -6,13 +6,16 @@ namespace RedoxFurnace.Oxidation;
 /// <summary>Which oxides of a system are stable at one temperature, in order from the metal upwards, and the steps between neighbours.</summary>
 public sealed class OxideLadder
 {
-    private OxideLadder(double kelvin, ImmutableArray<LadderRung> rungs, ImmutableArray<LadderStep> steps, ImmutableArray<Substance> unstable, ImmutableArray<Substance> withoutData)
+    private readonly ImmutableArray<Substance> _oxides;
+    private ImmutableArray<Substance> _unstable;
+
+    private OxideLadder(double kelvin, ImmutableArray<LadderRung> rungs, ImmutableArray<LadderStep> steps, ImmutableArray<Substance> oxides, ImmutableArray<Substance> withoutData)
     {
         Kelvin = kelvin;
         Rungs = rungs;
         Steps = steps;
-        Unstable = unstable;
         WithoutData = withoutData;
+        _oxides = oxides;
     }
 
     /// <summary>Temperature, K.</summary>
@@ -25,7 +28,7 @@ public sealed class OxideLadder
     public ImmutableArray<LadderStep> Steps { get; }
 
     /// <summary>Oxides with data that are not stable here.</summary>
-    public ImmutableArray<Substance> Unstable { get; }
+    public ImmutableArray<Substance> Unstable => _unstable.IsDefault ? _unstable = FindUnstable() : _unstable;
 
     /// <summary>Oxides without data at this temperature.</summary>
     public ImmutableArray<Substance> WithoutData { get; }
@@ -63,52 +66,49 @@ public sealed class OxideLadder
         return Rungs.Length - 1;
     }
 
+    /// <summary>Puts a hull into rungs and steps.</summary>
+    /// <param name="kelvin">K.</param>
+    /// <param name="hull">Vertices from the metal upwards with their Gibbs energies, J per unit of the system, activities and vapour pressure included.</param>
+    /// <param name="oxides">All oxides considered.</param>
+    /// <param name="withoutData">Those without data.</param>
+    /// <param name="oxygen">O2.</param>
     internal static OxideLadder Build(
         double kelvin,
-        ImmutableArray<Assemblage> hull,
+        IReadOnlyList<(Assemblage Assemblage, double Gibbs)> hull,
         ImmutableArray<Substance> oxides,
         ImmutableArray<Substance> withoutData,
-        Substance oxygen,
-        Activities activities,
-        double vapourLogPressure)
+        Substance oxygen)
     {
-        ImmutableArray<LadderRung> rungs = Gather(hull);
-        ImmutableArray<LadderStep>.Builder steps = ImmutableArray.CreateBuilder<LadderStep>(Math.Max(0, rungs.Length - 1));
-        for (int i = 1; i < rungs.Length; i++)
+        double oxygenGibbs = oxygen.Gibbs(kelvin);
+        ImmutableArray<LadderRung>.Builder rungs = ImmutableArray.CreateBuilder<LadderRung>(hull.Count);
+        ImmutableArray<LadderStep>.Builder steps = ImmutableArray.CreateBuilder<LadderStep>(hull.Count);
+        int start = 0;
+        for (int i = 1; i <= hull.Count; i++)
         {
-            OxidationCouple couple = new(rungs[i - 1].Highest, rungs[i].Lowest, oxygen);
-            string? gap = GapAbove(rungs[i - 1], withoutData, kelvin);
-            steps.Add(new LadderStep(
-                couple,
-                couple.StandardGibbs(kelvin),
-                gap is null ? couple.OxygenPotential(kelvin, activities, vapourLogPressure) : null,
-                gap));
-        }
-
-        HashSet<Substance> stable = [.. hull.SelectMany(assemblage => assemblage.Parts.Select(part => part.Substance))];
-        HashSet<string> groups = [.. stable.Select(substance => substance.Group).OfType<string>()];
-        ImmutableArray<Substance> unstable =
-            [.. oxides.Where(oxide => !stable.Contains(oxide) && !withoutData.Contains(oxide) && (oxide.Group is null || !groups.Contains(oxide.Group)))];
-        return new OxideLadder(kelvin, rungs, steps.ToImmutable(), unstable, withoutData);
-    }
-
-    private static ImmutableArray<LadderRung> Gather(ImmutableArray<Assemblage> hull)
-    {
-        List<LadderRung> rungs = [];
-        List<Assemblage> members = [];
-        foreach (Assemblage assemblage in hull)
-        {
-            if (members.Count > 0 && members[0].PhaseNames != assemblage.PhaseNames)
+            if (i < hull.Count && hull[i].Assemblage.PhaseNames == hull[start].Assemblage.PhaseNames)
             {
-                rungs.Add(new LadderRung([.. members]));
-                members.Clear();
+                continue;
             }
 
-            members.Add(assemblage);
+            rungs.Add(new LadderRung([.. hull.Skip(start).Take(i - start).Select(vertex => vertex.Assemblage)]));
+            if (i < hull.Count)
+            {
+                OxidationCouple couple = new(hull[i - 1].Assemblage, hull[i].Assemblage, oxygen);
+                double potential = ((hull[i].Gibbs - hull[i - 1].Gibbs) * couple.UnitsPerMoleO2) - oxygenGibbs;
+                steps.Add(new LadderStep(couple, kelvin, potential, GapAbove(rungs[^1], withoutData, kelvin)));
+            }
+
+            start = i;
         }
 
-        rungs.Add(new LadderRung([.. members]));
-        return [.. rungs];
+        return new OxideLadder(kelvin, rungs.ToImmutable(), steps.ToImmutable(), oxides, withoutData);
+    }
+
+    private ImmutableArray<Substance> FindUnstable()
+    {
+        HashSet<Substance> stable = [.. Rungs.SelectMany(rung => rung.Members).SelectMany(assemblage => assemblage.Parts.Select(part => part.Substance))];
+        HashSet<string> groups = [.. stable.Select(substance => substance.Group).OfType<string>()];
+        return [.. _oxides.Where(oxide => !stable.Contains(oxide) && !WithoutData.Contains(oxide) && (oxide.Group is null || !groups.Contains(oxide.Group)))];
     }
 
     /// <summary>Above the melting point of wustite only one member has data, so the composition that meets magnetite is not known.</summary>

@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using System.Collections.Immutable;
 using RedoxFurnace.Quantities;
 using RedoxFurnace.Substances;
@@ -12,6 +13,7 @@ public sealed class OxideSystem
 
     private readonly ImmutableArray<(string Element, double Amount)> _metals;
     private readonly Activities _activities;
+    private readonly ConcurrentDictionary<Substance, Assemblage> _single = new();
 
     private OxideSystem(ImmutableArray<(string Element, double Amount)> metals, ImmutableArray<Substance> elements, ImmutableArray<Substance?> vapours, ImmutableArray<Substance> oxides, Substance oxygen, Activities activities)
     {
@@ -84,26 +86,29 @@ public sealed class OxideSystem
     /// <summary>The ladder at a temperature.</summary>
     /// <param name="kelvin">K.</param>
     /// <param name="vapourLogPressure">ln(p/bar) at which metal vapours compete with the condensed metal; null leaves vapours out.</param>
+    /// <param name="boundElement">An element whose metal is bound in another phase (a carbide), or null.</param>
+    /// <param name="boundGibbs">Gibbs energy of binding, J per mole of that element, below 0.</param>
     /// <returns>Stable rungs from the metal upwards.</returns>
     /// <exception cref="OutsideDataException">A metal has no data at the temperature.</exception>
-    public OxideLadder LadderAt(double kelvin, double? vapourLogPressure = 0)
+    public OxideLadder LadderAt(double kelvin, double? vapourLogPressure = 0, string? boundElement = null, double boundGibbs = 0)
     {
-        List<Candidate> candidates = CandidatesAt(kelvin, vapourLogPressure, out ImmutableArray<Substance> withoutData);
+        List<Candidate> candidates = CandidatesAt(kelvin, vapourLogPressure, boundElement, boundGibbs, out ImmutableArray<Substance> withoutData);
         List<Vertex> vertices = _metals.Length == 1 ? SingleMetal(candidates) : SeveralMetals(candidates);
         List<Vertex> hull = LowerHull(vertices);
-        return OxideLadder.Build(kelvin, [.. hull.Select(vertex => vertex.Assemblage)], Oxides, withoutData, Oxygen, _activities, vapourLogPressure ?? 0);
+        return OxideLadder.Build(kelvin, [.. hull.Select(vertex => (vertex.Assemblage, vertex.Gibbs))], Oxides, withoutData, Oxygen);
     }
 
     private static Substance Metal(string element, SubstanceDatabase database)
         => database.Metal(element) ?? throw new RequestException($"'{element}' has no condensed metal in the database; 'oxides list' shows what there is");
 
-    private List<Candidate> CandidatesAt(double kelvin, double? vapourLogPressure, out ImmutableArray<Substance> withoutData)
+    private List<Candidate> CandidatesAt(double kelvin, double? vapourLogPressure, string? boundElement, double boundGibbs, out ImmutableArray<Substance> withoutData)
     {
         double rt = PhysicalConstants.GasConstant * kelvin;
         List<Candidate> candidates = new(Oxides.Length + 2);
         for (int i = 0; i < _metals.Length; i++)
         {
-            candidates.Add(MetalAt(i, kelvin, rt, vapourLogPressure));
+            Candidate metal = MetalAt(i, kelvin, rt, vapourLogPressure);
+            candidates.Add(_metals[i].Element == boundElement ? metal with { Gibbs = metal.Gibbs + boundGibbs } : metal);
         }
 
         List<Substance>? missing = null;
@@ -142,8 +147,8 @@ public sealed class OxideSystem
         List<Vertex> vertices = new(candidates.Count);
         foreach (Candidate candidate in candidates)
         {
-            double amount = 1 / candidate.Substance.Formula.Of(element);
-            vertices.Add(new Vertex(candidate.Substance.Formula.Of("O") * amount, candidate.Gibbs * amount, new Assemblage([(candidate.Substance, amount)])));
+            Assemblage assemblage = _single.GetOrAdd(candidate.Substance, substance => new Assemblage([(substance, 1 / substance.Formula.Of(element))]));
+            vertices.Add(new Vertex(assemblage.Oxygen, candidate.Gibbs * assemblage.Parts[0].Amount, assemblage));
         }
 
         return vertices;
