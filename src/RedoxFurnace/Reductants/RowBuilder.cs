@@ -10,8 +10,9 @@ internal sealed class RowBuilder(ChargePath charge, RankConditions conditions, S
 {
     private readonly GasReactions _gases = new(database);
     private readonly HashSet<Substance> _used = [];
+    private SideProductFinder? _finder;
 
-    private SideProductFinder Finder => new(database, _gases, conditions);
+    private SideProductFinder Finder => _finder ??= new(database, _gases, conditions);
 
     /// <summary>The row of one reductant.</summary>
     public RankedReductant Build(Reductant reductant)

@@ -11,6 +11,8 @@ internal sealed class SideProductFinder(SubstanceDatabase database, GasReactions
     private const double LeastPressureBar = 1e-6;
     private const double LeastShareOfTotal = 1e-4;
 
+    private readonly Dictionary<(string Metal, string Other), IReadOnlyList<(Substance Compound, Reaction Formation)>> _compounds = [];
+
     /// <summary>A vapour below this counts for nothing beside the gas of the furnace.</summary>
     private double Least => Math.Max(LeastPressureBar, LeastShareOfTotal * (conditions.Total?.Bar ?? 1));
 
@@ -114,14 +116,20 @@ internal sealed class SideProductFinder(SubstanceDatabase database, GasReactions
             return null;
         }
 
-        double lowest = Carbides(pair.Charge.Metal, kelvin).Select(entry => entry.GibbsPerCarbon).DefaultIfEmpty(0).Min();
-        return margin + (CarbonPerO2(pair, kelvin) * Math.Min(0, lowest));
+        double lowest = 0;
+        foreach ((Substance _, Reaction formation) in CompoundsOf(pair.Charge.Metal, "C", gases.Graphite, 1, SubstanceClass.Carbide))
+        {
+            lowest = Math.Min(lowest, FormationPerAtom(formation, pair.Charge.Metal, kelvin) ?? 0);
+        }
+
+        return lowest < 0 ? margin + (CarbonPerO2(pair, kelvin) * lowest) : margin;
     }
 
     /// <summary>Oxide and carbon to a carbide: the ladder of the charge with its metal bound in the carbide beside graphite.</summary>
     private double? CarbideMargin(ReductionPair pair, Substance carbide, double kelvin)
     {
-        if (FormationPerAtom(carbide, pair.Charge.Metal, "C", gases.Graphite, 1, kelvin) is not { } formation)
+        Reaction reaction = CompoundsOf(pair.Charge.Metal, "C", gases.Graphite, 1, SubstanceClass.Carbide).First(entry => ReferenceEquals(entry.Compound, carbide)).Formation;
+        if (FormationPerAtom(reaction, pair.Charge.Metal, kelvin) is not { } formation)
         {
             return null;
         }
@@ -147,34 +155,50 @@ internal sealed class SideProductFinder(SubstanceDatabase database, GasReactions
     private List<(Substance Compound, double Gibbs, double Expanded)> Binary(string metal, string other, Substance otherSubstance, double otherAtoms, double kelvin, SubstanceClass kind)
     {
         List<(Substance Compound, double Gibbs, double Expanded)> found = [];
-        foreach (Substance compound in database.MadeOf(new HashSet<string> { metal, other }).Where(substance => substance.Class == kind))
+        foreach ((Substance compound, Reaction formation) in CompoundsOf(metal, other, otherSubstance, otherAtoms, kind))
         {
-            if (FormationPerAtom(compound, metal, other, otherSubstance, otherAtoms, kelvin) is { } gibbs)
+            if (FormationPerAtom(formation, metal, kelvin) is { } gibbs)
             {
-                found.Add((compound, gibbs, ReactionUncertainty.OfGibbs(FormationOf(compound, metal, other, otherSubstance, otherAtoms), kelvin, null)));
+                found.Add((compound, gibbs, ReactionUncertainty.OfGibbs(formation, kelvin, null)));
             }
         }
 
         return found;
     }
 
-    private double? FormationPerAtom(Substance compound, string metal, string other, Substance otherSubstance, double otherAtoms, double kelvin)
+    /// <summary>Gibbs energy of formation from the metal at its activity, per mole of C or N2; null without data.</summary>
+    private double? FormationPerAtom(Reaction formation, string metal, double kelvin)
     {
-        if (compound.Formula.Of(metal) <= 0 || compound.Formula.Of(other) <= 0)
+        if (!formation.HasData(kelvin))
         {
             return null;
         }
 
-        Reaction formation = FormationOf(compound, metal, other, otherSubstance, otherAtoms);
-        return formation.HasData(kelvin)
-            ? formation.StandardGibbs(kelvin) - (PhysicalConstants.GasConstant * kelvin * -formation.NumberOf(database.Get(metal)) * conditions.Activities.NaturalLog(database.Get(metal)))
-            : null;
+        (Substance substance, double number) = formation.Terms.First(term => term.Substance.Id == metal);
+        return formation.StandardGibbs(kelvin) + (PhysicalConstants.GasConstant * kelvin * number * conditions.Activities.NaturalLog(substance));
     }
 
-    private Reaction FormationOf(Substance compound, string metal, string other, Substance otherSubstance, double otherAtoms)
+    /// <summary>Compounds of two elements with their formation reactions, looked up once: searches over temperature ask for them hundreds of times.</summary>
+    private IReadOnlyList<(Substance Compound, Reaction Formation)> CompoundsOf(string metal, string other, Substance otherSubstance, double otherAtoms, SubstanceClass kind)
+    {
+        if (_compounds.TryGetValue((metal, other), out IReadOnlyList<(Substance Compound, Reaction Formation)>? known))
+        {
+            return known;
+        }
+
+        Substance? element = database.Metal(metal);
+        IReadOnlyList<(Substance Compound, Reaction Formation)> found = element is null ? [] :
+            [.. database.MadeOf(new HashSet<string> { metal, other })
+                .Where(compound => compound.Class == kind && compound.Formula.Of(metal) > 0 && compound.Formula.Of(other) > 0)
+                .Select(compound => (compound, FormationOf(compound, element, metal, other, otherSubstance, otherAtoms)))];
+        _compounds[(metal, other)] = found;
+        return found;
+    }
+
+    private static Reaction FormationOf(Substance compound, Substance element, string metal, string other, Substance otherSubstance, double otherAtoms)
     {
         double per = otherAtoms / compound.Formula.Of(other);
-        return Reaction.Of([(database.Get(metal), -per * compound.Formula.Of(metal)), (otherSubstance, -1.0), (compound, per)]);
+        return Reaction.Of([(element, -per * compound.Formula.Of(metal)), (otherSubstance, -1.0), (compound, per)]);
     }
 
     private static double? Floor(Crossovers crossovers)
