@@ -98,7 +98,7 @@ internal sealed class RowBuilder(ChargePath charge, RankConditions conditions, S
             MetalVapourLogPressure = point.Charge.VapourPerO2 > 0 ? point.VapourLogPressure : null,
         };
         row = reductant.Kind == ReductantKind.Gas ? WithGas(row, point, balance) : row with { NormalCubicMetresPerKgOxide = balance.NormalCubicMetresPerKgOxide };
-        row = row with { Help = RankHelp.For(row, pair, kelvin, conditions), Notes = [.. NotesOf(row, pair)] };
+        row = row with { Help = RankHelp.For(row, pair, kelvin, conditions), Notes = [.. NotesOf(row)] };
         return RankJudgement.Judge(row, charge.Metal, kelvin, conditions);
     }
 
@@ -182,7 +182,7 @@ internal sealed class RowBuilder(ChargePath charge, RankConditions conditions, S
         }
     }
 
-    private static IEnumerable<string> NotesOf(RankedReductant row, ReductionPair pair)
+    private static IEnumerable<string> NotesOf(RankedReductant row)
     {
         if (row.Reductant.Note is { } note)
         {
@@ -201,17 +201,12 @@ internal sealed class RowBuilder(ChargePath charge, RankConditions conditions, S
 
         if (row.FurthestProduct != row.Product)
         {
-            yield return $"mass and heat to {row.FurthestProduct}, the furthest oxide of {row.Reductant.Metal} that still reduces; the margin is that of {row.Product}";
+            yield return $"mass and heat to {row.FurthestProduct}, the furthest that still reduces; the margin is that of {row.Product}";
         }
 
         if (row.HeatJoulesPerKgOxide is null || row.DutyJoulesPerKgOxide is null)
         {
             yield return "no heat: a partner has no heat data between 25 C and the temperature";
-        }
-
-        if (pair.At(row.Crossovers!.LowestKelvin).Margin > 0 && row.Crossovers.Range == WorkingRange.Always)
-        {
-            yield return FormattableString.Invariant($"works over the whole range searched, {row.Crossovers.LowestKelvin - 273.15:0} to {row.Crossovers.HighestKelvin - 273.15:0} C");
         }
     }
 
