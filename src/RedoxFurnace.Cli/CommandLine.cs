@@ -57,6 +57,8 @@ internal static class CommandLine
 
     public static int Done => Answered;
 
+    public static int Failed => CannotAnswer;
+
     private static int Say(TextWriter error, string message, int code)
     {
         error.WriteLine("redoxfurnace: " + message.ReplaceLineEndings(" "));

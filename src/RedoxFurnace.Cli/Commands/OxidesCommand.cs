@@ -14,6 +14,7 @@ internal static class OxidesCommand
         Command command = new("oxides", "what the database holds, and whether it is sound");
         command.Subcommands.Add(CreateList(screen, common));
         command.Subcommands.Add(CreateShow(screen, common));
+        command.Subcommands.Add(OxidesCheckCommand.Create(screen, common));
         return command;
     }
 
