@@ -13,6 +13,7 @@ internal static class CommandTree
         RootCommand root = new("Which reductant takes the oxygen off an oxide charge, from which temperature, in which atmosphere, with what heat, and how sure that is.");
         common.AddTo(root);
         root.Subcommands.Add(RankCommand.Create(screen, common));
+        root.Subcommands.Add(AtmosphereCommand.Create(screen, common));
         root.Subcommands.Add(LadderCommand.Create(screen, common));
         root.Subcommands.Add(OxidesCommand.Create(screen, common));
         return root;

@@ -89,7 +89,7 @@ public static class RankWords
         };
     }
 
-    internal static ImmutableArray<string> Assumptions(RankConditions conditions, ChargeDescent descent, Temperature at)
+    internal static ImmutableArray<string> Assumptions(RankConditions conditions, OxideDescent descent, Temperature at)
     {
         List<string> all = [FormattableString.Invariant($"temperature {at.Kelvin:0.##} K ({at.Celsius:0.#} C); every partner at this temperature")];
         all.Add(conditions.Total is { } total
@@ -115,7 +115,7 @@ public static class RankWords
         return [.. all];
     }
 
-    internal static ImmutableArray<string> Notes(ChargePath charge, ChargeDescent descent, ImmutableArray<Reductant> reductants, ImmutableArray<string> overlay)
+    internal static ImmutableArray<string> Notes(OxidePath charge, OxideDescent descent, ImmutableArray<Reductant> reductants, ImmutableArray<string> overlay)
     {
         List<string> notes = [];
         if (!descent.OxideIsStable)

@@ -40,9 +40,9 @@ public static class ReductantRanking
 
     private static RankResult RankFor(Substance oxide, string metal, ImmutableArray<Reductant> reductants, RankRequest request, SubstanceDatabase database)
     {
-        ChargePath charge = new(oxide, metal, database, request.Conditions.Activities);
+        OxidePath charge = new(oxide, metal, database, request.Conditions.Activities);
         double kelvin = request.At.Kelvin;
-        ChargeDescent descent = charge.At(kelvin, request.Conditions.Total?.NaturalLogBar ?? 0);
+        OxideDescent descent = charge.At(kelvin, request.Conditions.Total?.NaturalLogBar ?? 0);
         RowBuilder builder = new(charge, request.Conditions, database, kelvin);
         ImmutableArray<RankedReductant> rows = RankSorting.Sort([.. reductants.Select(builder.Build)], request.Order);
         LadderStep hardest = descent.Hardest;

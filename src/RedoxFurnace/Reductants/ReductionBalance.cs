@@ -22,7 +22,7 @@ internal sealed record ReductionBalance(
     /// <summary>Draws up the balance at a point.</summary>
     public static ReductionBalance Of(ReductionPair pair, ReductionPoint point)
     {
-        ChargePath charge = pair.Charge;
+        OxidePath charge = pair.Charge;
         double formulas = 1 / charge.UnitsPerFormula;
         Reaction giving = Reaction.Of(
             point.Charge.Bottom.Parts.Select(part => (part.Substance, part.Amount))

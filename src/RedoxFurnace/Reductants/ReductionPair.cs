@@ -6,14 +6,14 @@ namespace RedoxFurnace.Reductants;
 
 /// <summary>A charge oxide against a reductant under given conditions: the margin at any temperature.</summary>
 /// <remarks>THEORY.md, section 7.</remarks>
-internal sealed class ReductionPair(ChargePath charge, ReductantModel reductant, RankConditions conditions)
+internal sealed class ReductionPair(OxidePath charge, ReductantModel reductant, RankConditions conditions)
 {
     /// <summary>Hotter than this no furnace of the trade runs; crossovers are searched up to it.</summary>
     public const double HottestSearched = 3000;
 
     private const int MostShareRounds = 60;
 
-    public ChargePath Charge { get; } = charge;
+    public OxidePath Charge { get; } = charge;
 
     public ReductantModel Reductant { get; } = reductant;
 
@@ -73,7 +73,7 @@ internal sealed class ReductionPair(ChargePath charge, ReductantModel reductant,
         double gasLog = total;
         for (int round = 0; round < MostShareRounds; round++)
         {
-            ChargeDescent descent = Charge.At(kelvin, metalLog);
+            OxideDescent descent = Charge.At(kelvin, metalLog);
             double vapour = descent.VapourPerO2;
             if (vapour <= 0)
             {
@@ -106,6 +106,6 @@ internal sealed class ReductionPair(ChargePath charge, ReductantModel reductant,
             : throw new RequestException($"--pco {monoxide} leaves no room for {Charge.Metal} vapour at a total pressure of {Pressure.FromNaturalLogBar(total)}; give a lower --pco");
     }
 
-    private static ReductionPoint Point(double kelvin, ChargeDescent descent, IReadOnlyList<ReductantStep> steps, double? vapourLogPressure, double? gasLogPressure)
+    private static ReductionPoint Point(double kelvin, OxideDescent descent, IReadOnlyList<ReductantStep> steps, double? vapourLogPressure, double? gasLogPressure)
         => new(kelvin, descent, steps, vapourLogPressure, gasLogPressure);
 }

@@ -9,7 +9,7 @@ namespace RedoxFurnace.Reductants;
 /// <param name="Reductant">Steps of the reductant; the first decides.</param>
 /// <param name="VapourLogPressure">ln(p/bar) of metal vapour, or null where the metal is held as condensed.</param>
 /// <param name="GasLogPressure">ln(p/bar) shared by the reductant's gases, or null for 1 bar each.</param>
-internal sealed record ReductionPoint(double Kelvin, ChargeDescent Charge, IReadOnlyList<ReductantStep> Reductant, double? VapourLogPressure, double? GasLogPressure)
+internal sealed record ReductionPoint(double Kelvin, OxideDescent Charge, IReadOnlyList<ReductantStep> Reductant, double? VapourLogPressure, double? GasLogPressure)
 {
     /// <summary>Oxygen potential of the hardest step less that of the reductant, J per mole of O2.</summary>
     public double Margin => Charge.Hardest.OxygenPotential!.Value - Reductant[0].OxygenPotential;

@@ -6,7 +6,7 @@ using RedoxFurnace.Substances;
 namespace RedoxFurnace.Reductants;
 
 /// <summary>Builds the row of each reductant against one charge at one temperature.</summary>
-internal sealed class RowBuilder(ChargePath charge, RankConditions conditions, SubstanceDatabase database, double kelvin)
+internal sealed class RowBuilder(OxidePath charge, RankConditions conditions, SubstanceDatabase database, double kelvin)
 {
     private readonly GasReactions _gases = new(database);
     private readonly HashSet<Substance> _used = [];

@@ -1,17 +1,16 @@
 using System.Collections.Immutable;
-using RedoxFurnace.Oxidation;
 using RedoxFurnace.Quantities;
 using RedoxFurnace.Substances;
 
-namespace RedoxFurnace.Reductants;
+namespace RedoxFurnace.Oxidation;
 
 /// <summary>The way of a charge oxide down its ladder to one of its metals.</summary>
-internal sealed class ChargePath
+internal sealed class OxidePath
 {
     private readonly OxideSystem _system;
     private readonly double _oxygenOfOxide;
 
-    public ChargePath(Substance oxide, string metal, SubstanceDatabase database, Activities activities)
+    public OxidePath(Substance oxide, string metal, SubstanceDatabase database, Activities activities)
     {
         Oxide = oxide;
         Metal = metal;
@@ -41,7 +40,7 @@ internal sealed class ChargePath
 
     /// <summary>The steps at a temperature, from the metal up to the oxide; the metal may be bound in a carbide, which makes it easier to reach.</summary>
     /// <exception cref="OutsideDataException">The oxide or a metal has no data.</exception>
-    public ChargeDescent At(double kelvin, double? vapourLogPressure, double boundGibbs = 0)
+    public OxideDescent At(double kelvin, double? vapourLogPressure, double boundGibbs = 0)
     {
         if (!Oxide.TryGibbs(kelvin, out _))
         {
@@ -59,7 +58,7 @@ internal sealed class ChargePath
                 $"{Oxide.Id} is not stable at {kelvin:0.##} K: the ladder there is {string.Join(" | ", ladder.Rungs.Select(rung => rung.Name))}, so nothing is left to reduce to {Metal}"));
         }
 
-        return new ChargeDescent(ladder, steps, ladder.Rungs[bottom].Lowest, own >= 0);
+        return new OxideDescent(ladder, steps, ladder.Rungs[bottom].Lowest, own >= 0);
     }
 
     /// <summary>The highest rung below the oxide on which the wanted metal is metallic throughout.</summary>
