@@ -78,7 +78,7 @@ internal sealed class Screen(TextWriter output, TextWriter error, int width)
         Section("To be answered first", answer.Ask);
         Section("Notes", answer.Notes);
         Section("Assumed", answer.Assumptions);
-        Section("Hazards", [.. answer.Hazards.Select(hazard => $"{hazard.Severity.ToString().ToUpperInvariant()}: {hazard.Text}")]);
+        Section("Hazards", [.. answer.Hazards.Select(hazard => $"{hazard.Severity.ToString().ToUpperInvariant()}: {hazard.Brief}")]);
         Section("Sources", answer.Sources);
         if (answer.CallsForSafety)
         {

@@ -71,7 +71,7 @@ internal sealed class RowBuilder(OxidePath charge, RankConditions conditions, Su
         Use(reaction);
         double expanded = point.ExpandedUncertainty(null);
         Verdict verdict = VerdictOf(point.Margin, expanded);
-        Crossovers crossovers = Crossovers.Find(pair.TryMargin, pair.LowestKelvin, pair.HighestKelvin, pair.Charge.Breaks.Concat(pair.Reductant.Breaks));
+        Crossovers crossovers = Crossovers.Find(pair.TryMargin, Math.Min(pair.LowestKelvin, kelvin), Math.Max(pair.HighestKelvin, kelvin), pair.Charge.Breaks.Concat(pair.Reductant.Breaks));
         ReductionBalance balance = ReductionBalance.Of(pair, point);
         CarbideCheck? carbide = reductant.Kind == ReductantKind.Graphite ? Finder.CheckCarbide(pair, kelvin) : null;
         RankedReductant row = new()

@@ -19,5 +19,5 @@ public sealed record SafetyRule(
     public bool AppliesTo(HazardContext context) => When.Any(condition => condition.Holds(context));
 
     /// <summary>The note as printed: the advice, then the limits with a word on their editions.</summary>
-    public HazardNote ToNote() => new(Id, Severity, Facts.Count == 0 ? Advice : $"{Advice} Figures, strictest first: {string.Join("; ", Facts)}. Check the current editions.", Source);
+    public HazardNote ToNote() => new(Id, Severity, Advice, [.. Facts.Select(fact => fact.ToString())], Source);
 }
