@@ -1,0 +1,57 @@
+using RedoxFurnace.Atmospheres;
+using RedoxFurnace.Oxidation;
+using RedoxFurnace.Quantities;
+
+namespace RedoxFurnace.Tests.Atmospheres;
+
+public class GasRatioDiagramTests
+{
+    private static GasRatioDiagram Diagram(string element) => GasRatioDiagram.Of(
+        element, Temperature.FromCelsius(400), Temperature.FromCelsius(1200), 25, [Pressure.Standard, Pressure.FromBar(0.1)], Activities.AllOne, GasSamples.Database);
+
+    [Theory]
+    [InlineData("Fe")]
+    [InlineData("Co")]
+    [InlineData("Mn")]
+    [InlineData("V")]
+    public void Boundaries_are_the_ladder_s_numbers(string element)
+    {
+        GasRatioDiagram diagram = Diagram(element);
+        OxideSystem system = OxideSystem.OfMetal(element, GasSamples.Database, Activities.AllOne);
+        foreach ((GasRatioBoundary boundary, Reaction oxidation) in diagram.Monoxide.Select(line => (line, GasSamples.Reactions.CarbonMonoxideOxidation))
+            .Concat(diagram.Hydrogen.Select(line => (line, GasSamples.Reactions.HydrogenOxidation))))
+        {
+            foreach (GasRatioPoint point in boundary.Points)
+            {
+                LadderStep step = system.LadderAt(point.Kelvin, null).Steps.Single(one => one.Couple.Name == boundary.Couple);
+                Assert.Equal(step.OxygenPotential!.Value, GasReactions.PotentialOfRatio(oxidation, point.Kelvin, point.NaturalLogRatio), 1e-6);
+            }
+        }
+    }
+
+    [Fact]
+    public void Iron_magnetite_and_wustite_meet_near_570_C()
+    {
+        GasRatioDiagram iron = Diagram("Fe");
+        double end = iron.Monoxide.Single(line => line.Couple == "Fe/Fe3O4").Points[^1].Kelvin;
+        double start = iron.Monoxide.Single(line => line.Couple == "Fe/wustite").Points[0].Kelvin;
+        Assert.Equal(end, start, 0.02);
+        Assert.InRange(end - 273.15, 555, 585);
+        Assert.Contains(iron.Invariants, invariant => Math.Abs(invariant.Kelvin - end) < 0.02);
+    }
+
+    [Fact]
+    public void Graphite_crosses_iron_and_wustite_at_the_published_temperature()
+    {
+        // 685 C at 1 atm of CO + CO2 (row G2-087 of check-values.csv); band of 30 C.
+        GasRatioDiagram iron = Diagram("Fe");
+        GraphiteBoundary graphite = iron.Graphite[0];
+        GasRatioBoundary wustite = iron.Monoxide.Single(line => line.Couple == "Fe/wustite");
+        double crossing = wustite.Points.First(point => graphite.Points.Single(other => other.Kelvin == point.Kelvin).Share > point.Share).Kelvin;
+        Assert.Equal(685, crossing - 273.15, 30.0);
+    }
+
+    [Fact]
+    public void A_reversed_range_is_refused() => Assert.Throws<RequestException>(() =>
+        GasRatioDiagram.Of("Fe", Temperature.FromCelsius(900), Temperature.FromCelsius(400), 25, [], Activities.AllOne, GasSamples.Database));
+}
