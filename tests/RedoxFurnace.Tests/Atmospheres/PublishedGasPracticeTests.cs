@@ -7,7 +7,7 @@ namespace RedoxFurnace.Tests.Atmospheres;
 /// <summary>Rows of check-values.csv about furnace gases that the ledger lists as tested here.</summary>
 public class PublishedGasPracticeTests
 {
-    public static TheoryData<string> Rows => CheckLedger.Tested("metals in a gas");
+    public static TheoryData<string> Rows => CheckLedger.Of("tested", "metals in a gas");
 
     [Theory]
     [MemberData(nameof(Rows))]

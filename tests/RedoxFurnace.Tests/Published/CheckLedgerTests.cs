@@ -2,10 +2,10 @@ namespace RedoxFurnace.Tests.Published;
 
 public class CheckLedgerTests
 {
-    // Subjects a theory stands behind: CheckEquationTests, CheckValueTests, WaterVapourTests.
+    // Subjects a theory stands behind: CheckEquationTests, CheckValueTests, WaterVapourTests, PublishedGasPracticeTests.
     private static readonly string[] SubjectsWithTests =
     [
-        "equation lines", "gas ratios", "buffers", "graphite", "carbothermic onset", "silicothermic magnesium", "water vapour", "probe", "thermite heat", "furnace practice",
+        "equation lines", "gas ratios", "buffers", "graphite", "carbothermic onset", "silicothermic magnesium", "water vapour", "probe", "thermite heat", "furnace practice", "metals in a gas",
     ];
 
     private static readonly string[] SubjectsToCome = ["charge", "campaign"];
