@@ -16,7 +16,9 @@ public class OutputDocumentTests
     {
         Section section = Sections[shape];
         Assert.NotNull(section.Command);
-        ProgramRun run = ProgramRun.Of(section.Command["redoxfurnace ".Length..]);
+        // OUT stands for a place to write to.
+        using ScratchFolder scratch = new();
+        ProgramRun run = ProgramRun.Of(section.Command["redoxfurnace ".Length..].Replace("OUT", scratch["out"], StringComparison.Ordinal));
         JsonElement answer = run.Json();
         Assert.Equal(shape, answer.GetProperty("schema").GetString());
         SortedSet<string> written = new(StringComparer.Ordinal);

@@ -1,0 +1,96 @@
+using System.Collections.Immutable;
+using RedoxFurnace.Charts.Kinds;
+using RedoxFurnace.Charts.Layout;
+using RedoxFurnace.Charts.Plans;
+using RedoxFurnace.Quantities;
+using RedoxFurnace.Reductants;
+using RedoxFurnace.Safety;
+using RedoxFurnace.Substances;
+
+namespace RedoxFurnace.Charts.Sheets;
+
+/// <summary>Settings to stability chart.</summary>
+internal static class StabilityDrawing
+{
+    private static readonly (Temperature Low, Temperature High) UsualRange = (Temperature.FromCelsius(25), Temperature.FromCelsius(1800));
+
+    public static DrawnChart Draw(ChartSettings settings, SubstanceDatabase database, string version)
+    {
+        (Temperature low, Temperature high) = settings.Read("range", ChartDrawing.Range, UsualRange);
+        string[] of = settings.Read<string[]>("of", (text, _) => [.. Names(text).Select(name => Known(name, database))], []);
+        string[] with = settings.Read<string[]>("with", (text, _) => [.. Names(text).Select(name => ReductantCatalogue.Of(database).Get(name).Id)], []);
+        StabilityRequest request = new([.. of], [.. with], low, high)
+        {
+            Direct = settings.Truth("direct"),
+            Monoxide = settings.Read<ImmutableArray<Pressure>>("pco", (text, what) => [.. PressureSeries.Parse(text, what).Points], []),
+            GasRatios = ChartDrawing.Ratios(settings),
+            Activities = ChartDrawing.ReadActivities(settings, database),
+        };
+        StabilityResult result = StabilityLines.Of(request, database);
+        ImmutableArray<HazardNote> hazards = ChartDrawing.Hazards(database, new HazardWork
+        {
+            Charge = [.. result.Lines.Where(line => !line.IsReductant).SelectMany(line => line.Substances.Where(substance => substance.Formula.Of("O") > 0 && substance.Formula.Atoms.Count > 1)).Select(substance => substance.Id).Distinct()],
+            Reductants = with,
+            LowestKelvin = low.Kelvin,
+            HighestKelvin = high.Kelvin,
+        });
+        StabilityChartOptions options = ChartDrawing.Common(
+            new StabilityChartOptions
+            {
+                Kilocalories = settings.Word("energy", "kJ", "kcal") == "kcal",
+                Bands = settings.Truth("bands"),
+                Highlight = settings.Text("highlight"),
+                Crossovers = settings.Truth("crossovers", absent: true),
+                Scales = [.. settings.List("scales")],
+                Frost = settings.Read<(double, Pressure)?>("frost", (text, what) => (Share.Parse(text, what), settings.Read("pressure", Pressure.Parse, Pressure.Standard)), null),
+            },
+            settings,
+            hazards,
+            version);
+        (ImmutableArray<Charts.Scenes.Scene> scenes, string? split) = Pages(result, options, database);
+        return new DrawnChart(
+            scenes,
+            Headline(result),
+            [.. result.Notes, .. split is null ? Array.Empty<string>() : [split]],
+            hazards,
+            result.Sources);
+    }
+
+    private static string[] Names(string text) => text.Split(',', StringSplitOptions.TrimEntries | StringSplitOptions.RemoveEmptyEntries);
+
+    private static string Known(string name, SubstanceDatabase database) => AtomicWeights.Has(name) ? name : database.Get(name).Id;
+
+    /// <summary>More lines than a page can label are spread over several pages, reductants on each.</summary>
+    private static (ImmutableArray<Charts.Scenes.Scene> Scenes, string? Note) Pages(StabilityResult result, StabilityChartOptions options, SubstanceDatabase database)
+    {
+        ChartPlan whole = StabilityChart.Plan(result, options, database);
+        int fit = ChartLayout.LinesThatFit(whole);
+        if (result.Lines.Length <= fit)
+        {
+            return ([ChartLayout.Lay(whole)], null);
+        }
+
+        ImmutableArray<StabilityLine> reductants = [.. result.Lines.Where(line => line.IsReductant)];
+        StabilityLine[][] parts = [.. result.Lines.Where(line => !line.IsReductant).Chunk(Math.Max(1, fit - reductants.Length))];
+        return (
+            [
+                .. parts.Select((part, i) =>
+                {
+                    HashSet<string> ids = [.. part.Select(line => line.Id)];
+                    StabilityResult own = result with { Lines = [.. part, .. reductants], Crossings = [.. result.Crossings.Where(crossing => ids.Contains(crossing.Couple))] };
+                    StabilityChartOptions titled = options with { Title = FormattableString.Invariant($"{whole.Title.Plain} (part {i + 1} of {parts.Length})"), Highlight = own.Lines.Any(line => line.Id == options.Highlight) ? options.Highlight : null };
+                    return ChartLayout.Lay(StabilityChart.Plan(own, titled, database));
+                }),
+            ],
+            FormattableString.Invariant($"{result.Lines.Length} lines are more than one page of this size can label ({fit}): spread over {parts.Length} pages; a larger --size or fewer names keep them together"));
+    }
+
+    private static string Headline(StabilityResult result)
+    {
+        string lines = FormattableString.Invariant($"{result.Lines.Length} lines from {ChartDrawing.Celsius(result.Request.Low.Kelvin)} to {ChartDrawing.Celsius(result.Request.High.Kelvin)}");
+        return result.Crossings.IsEmpty
+            ? lines + (result.Lines.Any(line => line.IsReductant) ? "; no reductant's line meets a couple's in this range" : "")
+            : $"{lines}; crossovers: " + string.Join("; ", result.Crossings.Take(6).Select(crossing => $"{crossing.Reductant} reduces {crossing.Couple} {(crossing.ReducesAbove ? "above" : "below")} {ChartDrawing.Celsius(crossing.Kelvin)}"))
+                + (result.Crossings.Length > 6 ? FormattableString.Invariant($" and {result.Crossings.Length - 6} more") : "");
+    }
+}
