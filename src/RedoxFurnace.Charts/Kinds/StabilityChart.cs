@@ -141,6 +141,7 @@ public static class StabilityChart
         [
             $"Basis: per mole of O2, standard pressure 1 bar, metal vapour at 1 bar, {request.Activities.Describe()}; {(request.Direct ? "metal to one oxide" : "couples of the oxide ladder")}. Uncertainty: expanded, k = 2"
                 + (options.Bands ? ", shown as bands." : $", {Range(result)} kJ per mol O2 for the lines drawn."),
+            .. TemperatureAxis.WindowWords(options),
             "Equilibrium of pure phases, not rate: a line below another can take its oxygen, it need not do so soon.",
             .. result.Notes.Select(note => "Note: " + note + "."),
             "Sources: " + string.Join("; ", result.Sources) + ".",

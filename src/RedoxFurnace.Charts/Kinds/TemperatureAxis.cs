@@ -28,6 +28,10 @@ internal static class TemperatureAxis
     /// <summary>The operating window, or nothing.</summary>
     public static WindowPlan[] Window(ChartOptions options)
         => options.Window is { } window
-            ? [new WindowPlan(window.Low.Kelvin, window.High.Kelvin, RichText.Of($"operating window {Text(window.Low.Kelvin, options.Unit)} to {Text(window.High.Kelvin, options.Unit)}"))]
+            ? [new WindowPlan(window.Low.Kelvin, window.High.Kelvin, RichText.Of($"operating window {Text(window.Low.Kelvin, options.Unit)} to {Text(window.High.Kelvin, options.Unit)}"), RichText.Of("window"))]
             : [];
+
+    /// <summary>The operating window in a sentence, or nothing: the plot may have no room for the numbers.</summary>
+    public static string[] WindowWords(ChartOptions options)
+        => options.Window is { } window ? [$"Operating window: {Text(window.Low.Kelvin, options.Unit)} to {Text(window.High.Kelvin, options.Unit)} (tinted)."] : [];
 }

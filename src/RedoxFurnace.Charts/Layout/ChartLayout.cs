@@ -53,7 +53,8 @@ public static class ChartLayout
     private sealed class Sheet
     {
         private const double Margin = 7;
-        private const double RulerPitch = 17;
+        private const double LeastRulerPitch = 17;
+        private const double RulerScaleWidth = 4;
         private const double MarkSize = 2;
         private const double SymbolPitch = 24;
         private const double Rim = 0.3;
@@ -68,6 +69,7 @@ public static class ChartLayout
         private readonly ImmutableArray<string> _caption;
         private readonly double _blockHeight;
         private readonly double _footTop;
+        private readonly double _rulerPitch;
         private int _numbered;
 
         public Sheet(ChartPlan plan)
@@ -76,7 +78,8 @@ public static class ChartLayout
             Sizes = TypeSizes.For(plan.Page);
             double labels = plan.Series.Where(series => series.Label.Runs.Length > 0).Select(series => ChartFont.Width(series.Label, Sizes.Label)).DefaultIfEmpty(0).Max();
             double left = Margin + (2.6 * Sizes.Label) + plan.Y.Ticks.Select(tick => ChartFont.Width(tick.Text, Sizes.Label)).DefaultIfEmpty(0).Max();
-            double right = plan.Page.Width - Margin - (RulerPitch * plan.Rulers.Length) - (labels > 0 ? labels + 3.5 : 2);
+            _rulerPitch = Math.Max(LeastRulerPitch, plan.Rulers.Select(ruler => ChartFont.Width(ruler.Label, Sizes.Small)).DefaultIfEmpty(0).Max() + 3);
+            double right = plan.Page.Width - Margin - (_rulerPitch * plan.Rulers.Length) - (labels > 0 ? labels + 3.5 : 2);
             double top = Margin + Sizes.Title + (plan.Subtitle is null ? 0 : Sizes.Label * 1.5) + (plan.Top is null ? 2.5 : 3.4 * Sizes.Label) + 1;
             _caption = Wrap(plan.Frame.Caption, plan.Frame.Safety, plan.Page.Width - (2 * Margin));
             _blockHeight = plan.Frame.Kind == FrameKind.Document ? BlockRows() * Sizes.Small * 2.9 : 0;
@@ -133,9 +136,10 @@ public static class ChartLayout
                     items.Add(new LineItem([new(edge, Plot.Top), new(edge, Plot.Bottom)], new Stroke(Ink.Of("#0072B2"), 0.18, [1.2, 0.8])));
                 }
 
-                double width = ChartFont.Width(window.Label, Sizes.Small);
+                RichText words = ChartFont.Width(window.Label, Sizes.Small) < right - left - 1 ? window.Label : window.Narrow;
+                double width = ChartFont.Width(words, Sizes.Small);
                 double middle = Math.Clamp(0.5 * (left + right), Plot.Left + (width / 2) + 0.5, Plot.Right - (width / 2) - 0.5);
-                TextItem label = Text(middle, Plot.Top + (1.2 * Sizes.Small), window.Label, Sizes.Small, Ink.Of("#00568A"), TextAnchor.Middle);
+                TextItem label = Text(middle, Plot.Top + (1.2 * Sizes.Small), words, Sizes.Small, Ink.Of("#00568A"), TextAnchor.Middle);
                 items.Add(label);
                 _obstacles.Add(ChartFont.Box(label).Grown(Rim));
             }
@@ -262,7 +266,7 @@ public static class ChartLayout
         {
             foreach ((int index, RulerPlan ruler) in _plan.Rulers.Index())
             {
-                double x = _plan.Page.Width - Margin - (RulerPitch * (_plan.Rulers.Length - index)) + 4;
+                double x = _plan.Page.Width - Margin - (_rulerPitch * (_plan.Rulers.Length - index)) + RulerScaleWidth;
                 double run = _map.DataX(x) - ruler.Pivot.X;
                 Stroke line = new(Ink.Quiet, 0.2);
                 List<SceneItem> items = [new LineItem([new(x, Plot.Top), new(x, Plot.Bottom)], line)];
@@ -284,7 +288,7 @@ public static class ChartLayout
                     }
                 }
 
-                items.Add(Text(x, Plot.Top - 1.4, ruler.Label, Sizes.Small, Ink.Black, TextAnchor.Middle));
+                items.Add(Text(x - (RulerScaleWidth / 2), Plot.Top - 1.4, ruler.Label, Sizes.Small, Ink.Black));
                 PagePoint pivot = _map.At(ruler.Pivot);
                 if (Plot.Grown(0.5).Holds(pivot))
                 {

@@ -6,4 +6,5 @@ namespace RedoxFurnace.Charts.Plans;
 /// <param name="Low">From.</param>
 /// <param name="High">To.</param>
 /// <param name="Label">Written at its head.</param>
-public sealed record WindowPlan(double Low, double High, RichText Label);
+/// <param name="Narrow">Written there instead where the range is too narrow for the label.</param>
+public sealed record WindowPlan(double Low, double High, RichText Label, RichText Narrow);

@@ -6,6 +6,8 @@ namespace RedoxFurnace.Charts.Writing;
 /// <summary>Paints a scene on a Skia canvas whose unit has been set to a millimetre.</summary>
 internal static class SkiaPainter
 {
+    private const double LetteringSize = 100;
+
     public static void Paint(SKCanvas canvas, Scene scene)
     {
         foreach (SceneItem item in scene.Groups.SelectMany(group => group.Items))
@@ -88,13 +90,16 @@ internal static class SkiaPainter
         canvas.Save();
         canvas.Translate((float)item.Place.X, (float)item.Place.Y);
         canvas.RotateDegrees((float)-item.Turned);
-        double width = ChartFont.Width(item.Text, item.Size, item.IsBold);
+
+        // Advances are kept in 64ths of a unit: at 2 units a letter that is a millimetre over a long line, at 100 nothing.
+        canvas.Scale((float)(item.Size / LetteringSize));
+        double width = ChartFont.Width(item.Text, LetteringSize, item.IsBold);
         double x = item.Anchor switch { TextAnchor.Start => 0, TextAnchor.Middle => -width / 2, _ => -width };
         using SKPaint paint = Fill(item.Ink);
         foreach (TextRun run in item.Text.Runs)
         {
-            double size = run.Level == 0 ? item.Size : item.Size * RichText.SmallScale;
-            double y = run.Level switch { < 0 => ChartFont.Drop * item.Size, > 0 => -ChartFont.Rise * item.Size, _ => 0 };
+            double size = run.Level == 0 ? LetteringSize : LetteringSize * RichText.SmallScale;
+            double y = run.Level switch { < 0 => ChartFont.Drop * LetteringSize, > 0 => -ChartFont.Rise * LetteringSize, _ => 0 };
             using SKFont font = ChartFont.Font(item.IsBold, (float)size);
             canvas.DrawText(run.Text, (float)x, (float)y, SKTextAlign.Left, font, paint);
             x += ChartFont.Width(run.Text, size, item.IsBold);

@@ -22,13 +22,14 @@ internal static class ChartCommand
     public static Command Create(Screen screen, CommonOptions common)
     {
         Argument<string?> sheet = new("SHEET") { Description = "a chart sheet (charts/sheets holds some); options add to it", Arity = ArgumentArity.ZeroOrOne };
-        Option<string> to = new("--to") { Description = "file to write: .svg, .png or .pdf", Required = true, HelpName = "FILE" };
+        Option<string> to = new("--to") { Description = "file to write: .svg, .png or .pdf", HelpName = "FILE" };
+        Option<string> gallery = new("--gallery") { Description = "draw every sheet of FOLDER/sheets into FOLDER/gallery, with a README", HelpName = "FOLDER" };
         Option<bool> force = new("--force") { Description = "replace an existing file" };
         Option<string> dpi = new("--dpi") { Description = "dots per inch of a PNG, 96 to 600 (150)", HelpName = "N" };
         Dictionary<string, Option> settings = ChartSettings.Keys.ToDictionary(key => key.Key, key => IsSwitch(key.Key)
             ? (Option)new Option<bool>("--" + key.Key) { Description = key.Meaning }
             : new Option<string>("--" + key.Key) { Description = key.Meaning, HelpName = "TEXT" });
-        Command command = new("chart", "draw a stability chart, or what a chart sheet describes, to SVG, PNG or PDF") { sheet, to, force, dpi };
+        Command command = new("chart", "draw a stability chart, or what a chart sheet describes, to SVG, PNG or PDF") { sheet, to, force, dpi, gallery };
         foreach (Option option in settings.Values)
         {
             command.Options.Add(option);
@@ -37,7 +38,14 @@ internal static class ChartCommand
         command.SetAction(parsed =>
         {
             SubstanceDatabase database = common.Database(parsed);
-            string target = parsed.GetValue(to)!;
+            if (parsed.GetValue(gallery) is { } folder)
+            {
+                return parsed.GetValue(to) is null && parsed.GetValue(sheet) is null
+                    ? screen.Show(Present(ChartGallery.Write(folder, database, parsed.GetValue(force))), common.Form(parsed))
+                    : throw new RequestException("--gallery draws every sheet of its folder; leave out SHEET and --to");
+            }
+
+            string target = parsed.GetValue(to) ?? throw new RequestException("'chart' needs --to: file to write, such as --to stability.svg");
             string format = Format(target);
             int dots = parsed.GetValue(dpi) is { } text ? (int)NumberWithUnit.ParsePlain(text, "--dpi") : UsualDpi;
             ChartSettings asked = ChartSettings.Of(settings.Select(pair => (pair.Key, Given(parsed, pair.Value))));
@@ -115,6 +123,23 @@ internal static class ChartCommand
 
         return files;
     }
+
+    private static Answer Present(IReadOnlyList<string> files) => new()
+    {
+        Headline = $"Wrote {files.Count} files of the gallery.",
+        Tables = [new AnswerTable(null, [new Column("file", "file", false)], [.. files.Select(file => (IReadOnlyList<Cell>)[Cell.Word(file)])])],
+        Json = writer =>
+        {
+            writer.WriteStartObject();
+            writer.WriteString("schema", "redoxfurnace/chart/1");
+            writer.WriteString("headline", FormattableString.Invariant($"{files.Count} files of the gallery"));
+            writer.Texts("files", files);
+            writer.WriteStartArray("lines");
+            writer.WriteEndArray();
+            writer.Common([], [], null, [], [], []);
+            writer.WriteEndObject();
+        },
+    };
 
     private static Answer Present(DrawnChart drawn, string[] files) => new()
     {
