@@ -14,6 +14,7 @@ internal static class CommandTree
         common.AddTo(root);
         root.Subcommands.Add(RankCommand.Create(screen, common));
         root.Subcommands.Add(AtmosphereCommand.Create(screen, common));
+        root.Subcommands.Add(GasCommand.Create(screen, common));
         root.Subcommands.Add(LadderCommand.Create(screen, common));
         root.Subcommands.Add(ChartCommand.Create(screen, common));
         root.Subcommands.Add(OxidesCommand.Create(screen, common));
