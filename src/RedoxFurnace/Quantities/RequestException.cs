@@ -33,7 +33,7 @@ public sealed class RequestException : Exception
         string? near = NearestSpelling.Find(found, known);
         string hint = near is not null
             ? $"did you mean '{near}'?"
-            : known.Count <= 16
+            : known.Count <= 24
                 ? "known: " + string.Join(", ", known)
                 : $"{known.Count} are known, see 'oxides list'";
         return new RequestException($"{what} '{found}' is not known; {hint}");

@@ -57,6 +57,68 @@ public class BadInputTests
     public void What_is_no_finite_number_is_refused(string line) => ProgramRun.Of(line).IsRefused(Wrong);
 
     [Theory]
+    [InlineData("gas \"H2 80%, N2 50%\" --at 900C", "130 %", "at most 100 %")]
+    [InlineData("gas \"H2 30%, Xx 20%\" --at 900C", "'Xx'", "H2O")]
+    [InlineData("gas \"H2 -3%\" --at 900C", "'-3%'", "0 to 100%")]
+    [InlineData("gas \"H2 130%\" --at 900C", "'130%'", "0 to 100%")]
+    [InlineData("gas \"H2 30%, Ar 70%, frost -45C, H2O 2%\" --at 900C", "water is given twice")]
+    [InlineData("gas --as endothermc --at 900C", "'endothermc'", "did you mean 'endothermic'?")]
+    [InlineData("gas --at 900C", "needs an analysis")]
+    [InlineData("gas \"H2 100%\" --at 900C --over Qq=0.1", "'Qq'")]
+    [InlineData("gas \"H2 100%\" --at 900C --over Cr=0.1,Ni=8%", "mixes activities and mass percents")]
+    [InlineData("gas \"H2 100%\" --at 900C --steel C=3%", "'C=3%'")]
+    [InlineData("reading --probe 1120mV", "needs --probe-temperature")]
+    [InlineData("reading --probe 1120 --probe-temperature 900C", "no unit")]
+    [InlineData("reading --frost -57C --at-pressure 6bar", "absolute or gauge", "6bara")]
+    [InlineData("reading", "needs at least one reading")]
+    [InlineData("reading --frost 20C", "frost")]
+    public void A_gas_or_reading_that_cannot_be_is_refused(string line, params string[] parts) => ProgramRun.Of(line).IsRefused(Wrong, parts);
+
+    [Theory]
+    [InlineData("gas \"H2 100%, frost -40C\" --at 3000C", "300 to 2500 K")]
+    [InlineData("gas \"H2 100%, frost -40C\" --at 900C --pressure 300bar", "1e-9 to 100 bar")]
+    public void A_gas_outside_the_range_reckoned_is_refused_with_the_limit(string line, params string[] parts) => ProgramRun.Of(line).IsRefused(Unanswerable, parts);
+
+    [Theory]
+    [InlineData("chart --of Cr --to chart.bmp", "'chart.bmp'", ".svg, .png, .pdf")]
+    [InlineData("chart --of Cr --range 1800C..200C --to chart.svg", "reversed", "200C..1800C")]
+    [InlineData("chart --to chart.svg", "no lines")]
+    [InlineData("chart --of Cr --size A9 --to chart.svg", "'A9'", "A4")]
+    [InlineData("chart --of Cr --scales pO3 --to chart.svg", "'pO3'", "CO/CO2")]
+    [InlineData("chart --of Cr --highlight Fe --to chart.svg", "'Fe'", "Cr/Cr2O3")]
+    [InlineData("chart no-such-sheet.yaml --to chart.svg", "'no-such-sheet.yaml'")]
+    public void A_chart_that_cannot_be_is_refused(string line, params string[] parts)
+    {
+        ProgramRun.Of(line).IsRefused(Wrong, parts);
+        Assert.False(File.Exists("chart.svg"));
+    }
+
+    [Fact]
+    public void A_target_that_cannot_be_written_or_exists_is_refused_and_left_alone()
+    {
+        using ScratchFolder folder = new();
+        ProgramRun.OfWords(["chart", "--of", "Cr", "--to", folder["none/chart.svg"]]).IsRefused(Unanswerable, "does not exist");
+        string there = folder.Write("chart.svg", "mine");
+        ProgramRun.OfWords(["chart", "--of", "Cr", "--to", there]).IsRefused(Unanswerable, "exists already", "--force");
+        Assert.Equal("mine", File.ReadAllText(there));
+        Assert.Equal(0, ProgramRun.OfWords(["chart", "--of", "Cr", "--to", there, "--force"]).ExitCode);
+        Assert.StartsWith("<?xml", File.ReadAllText(there), StringComparison.Ordinal);
+        Assert.Equal(["chart.svg"], Directory.GetFiles(folder.Folder).Select(Path.GetFileName));
+    }
+
+    [Theory]
+    [InlineData("of: Cr,Fe\nwth: C\n", "sheet.yaml:2:1", "'wth'", "did you mean 'with'?")]
+    [InlineData("of: Cr,Fe\nrange: 1800C..200C\n", "sheet.yaml:2:8", "reversed")]
+    [InlineData("of: Cr,Fe\nof: Cr\n", "sheet.yaml:2:1", "twice")]
+    [InlineData("of: Cr,Qq\n", "sheet.yaml:1:5", "'Qq'")]
+    public void A_wrong_chart_sheet_is_refused_with_line_and_column(string text, params string[] parts)
+    {
+        using ScratchFolder folder = new();
+        string sheet = folder.Write("sheet.yaml", text.Replace("\\n", "\n", StringComparison.Ordinal));
+        ProgramRun.OfWords(["chart", sheet, "--to", folder["chart.svg"]]).IsRefused(Wrong, parts);
+    }
+
+    [Theory]
     [InlineData("rnk Cr2O3 --at 1400C", "'rnk'", "did you mean 'rank'?")]
     [InlineData("rank Cr2O3 --at 1400C --wth C", "'--wth'", "did you mean '--with'?")]
     [InlineData("rank Cr2O3 --at 1400C --by price", "'price'", "margin, crossover, mass, heat")]
