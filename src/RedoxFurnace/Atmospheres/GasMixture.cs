@@ -9,6 +9,9 @@ public sealed class GasMixture
     /// <summary>Number of <see cref="GasSpecies"/>.</summary>
     public const int SpeciesCount = 10;
 
+    /// <summary>Smaller shares count as nothing: in ten thousand cubic metres of gas they would not be one molecule.</summary>
+    public const double SmallestShare = 1e-30;
+
     private const double SumTolerance = 1e-9;
 
     private GasMixture(ImmutableArray<double> fractions) => Fractions = fractions;
@@ -124,7 +127,7 @@ public sealed class GasMixture
         }
 
         return Math.Abs(sum - 1) <= SumTolerance
-            ? new GasMixture([.. fractions])
+            ? new GasMixture([.. fractions.Select(fraction => fraction < SmallestShare ? 0 : fraction)])
             : throw new ArgumentException("fractions of a gas sum to 1", nameof(fractions));
     }
 }

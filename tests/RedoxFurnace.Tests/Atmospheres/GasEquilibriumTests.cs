@@ -12,47 +12,53 @@ public class GasEquilibriumTests
 
     [Fact]
     public void Random_gases_converge_and_balance() => GasSamples.AnyGas.Sample(
-        (gas, at, total) =>
+        41,
+        2000,
+        sample =>
         {
+            (GasMixture gas, Temperature at, Pressure total) = sample;
             GasAnswer answer = GasSamples.Equilibrium.Of(gas, at, total);
             return Balances(gas, answer.AsAnalysed) && Balances(gas, answer.AtEquilibrium) && (answer.WithoutGraphite is null || Balances(gas, answer.WithoutGraphite));
         },
-        iter: Math.Max(2000, Check.Iter),
-        seed: "0000KOIPZ3m0",
-        print: Print);
+        Print);
 
     [Fact]
     public void Every_state_obeys_the_laws_of_mass_action() => GasSamples.AnyGas.Sample(
-        (gas, at, total) =>
+        42,
+        1000,
+        sample =>
         {
+            (GasMixture gas, Temperature at, Pressure total) = sample;
             GasAnswer answer = GasSamples.Equilibrium.Of(gas, at, total);
             return HoldsLaws(answer.AtEquilibrium) && HoldsSum(answer.AtEquilibrium) && HoldsSum(answer.AsAnalysed) && answer.AtEquilibrium.NaturalLogCarbonActivity is null or <= 1e-9;
         },
-        iter: 500,
-        seed: "0000KOIPZ3m1",
-        print: Print);
+        Print);
 
     [Fact]
     public void An_equilibrated_gas_does_not_change() => GasSamples.AnyGas.Sample(
-        (gas, at, total) =>
+        43,
+        2000,
+        sample =>
         {
+            (GasMixture gas, Temperature at, Pressure total) = sample;
             GasState once = GasSamples.Equilibrium.AtEquilibrium(gas, at, total);
             GasState twice = GasSamples.Equilibrium.AtEquilibrium(once.ToMixture(), at, total);
             return Enum.GetValues<GasSpecies>()
                 .Where(species => once.Fraction(species) > 1e-9)
                 .All(species => Math.Abs(once.NaturalLogPressure(species) - twice.NaturalLogPressure(species)) < 1e-6);
         },
-        iter: 500,
-        seed: "0000KOIPZ3m2",
-        print: Print);
+        Print);
 
     [Fact]
     public void A_gas_in_equilibrium_by_construction_is_found_again_from_its_shares()
     {
         // Potentials are chosen, the partial pressures follow from the constants, and the solver has to find the potentials again.
         Gen.Select(Gen.Double[600, 2300], Gen.Double[-14, -0.1], Gen.Double[-30, -3], Gen.Double[-12, -0.1], Gen.Double[-6, 0]).Sample(
-            (kelvin, logHydrogen, logOxygen, logCarbon, logNitrogen) =>
+            44,
+            2000,
+            sample =>
             {
+                (double kelvin, double logHydrogen, double logOxygen, double logCarbon, double logNitrogen) = sample;
                 Span<double> logK = stackalloc double[GasFormation.Reacting];
                 new GasFormation(GasSamples.Database).Fill(kelvin, logK);
                 double[][] powers = [[0, 1, 0, 0], [0, 1, 1, 0], [1, 0, 1, 0], [1, 0, 2, 0], [1, 2, 0, 0], [0, 0, 2, 0], [0, 0, 0, 1], [0, 1.5, 0, 0.5]];
@@ -74,9 +80,7 @@ public class GasEquilibriumTests
                 double scarcest = Math.Min(gas.OxygenAtoms, Math.Min(gas.CarbonAtoms, gas.HydrogenAtoms));
                 double digits = Math.Max(LogWithin, 1e-15 / Math.Max(1e-300, Scarcity(gas)));
                 return scarcest < 1e-250 || logs.Select((log, i) => Math.Abs(log - found.NaturalLogPressures[i])).Max() < digits;
-            },
-            iter: 2000,
-            seed: "0000KOIPZ3m3");
+            });
     }
 
     /// <summary>The least of the fuel left and the oxygen left: what rounding of the shares themselves leaves undetermined is no error of the solver.</summary>
