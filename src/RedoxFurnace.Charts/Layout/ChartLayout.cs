@@ -13,8 +13,8 @@ public static class ChartLayout
     [
         sheet => sheet.Heading(),
         sheet => sheet.Windows(),
-        sheet => sheet.Fields(),
         sheet => sheet.Grid(),
+        sheet => sheet.Fields(),
         sheet => sheet.Bands(),
         sheet => sheet.Lines(),
         sheet => sheet.Axes(),
@@ -76,8 +76,8 @@ public static class ChartLayout
         {
             _plan = plan;
             Sizes = TypeSizes.For(plan.Page);
-            double labels = plan.Series.Where(series => series.Label.Runs.Length > 0).Select(series => ChartFont.Width(series.Label, Sizes.Label)).DefaultIfEmpty(0).Max();
-            double left = Margin + (2.6 * Sizes.Label) + plan.Y.Ticks.Select(tick => ChartFont.Width(tick.Text, Sizes.Label)).DefaultIfEmpty(0).Max();
+            double labels = plan.Series.Where(IsPlacedHere).Select(series => ChartFont.Width(series.Label, LabelSize(series, Sizes.Label))).DefaultIfEmpty(0).Max();
+            double left = Margin + (2.6 * Sizes.Label) + plan.Y.Ticks.Select(tick => ChartFont.Width(RichText.Of(tick.Text), Sizes.Label)).DefaultIfEmpty(0).Max();
             _rulerPitch = Math.Max(LeastRulerPitch, plan.Rulers.Select(ruler => ChartFont.Width(ruler.Label, Sizes.Small)).DefaultIfEmpty(0).Max() + 3);
             double right = plan.Page.Width - Margin - (_rulerPitch * plan.Rulers.Length) - (labels > 0 ? labels + 3.5 : 2);
             double top = Margin + Sizes.Title + (plan.Subtitle is null ? 0 : Sizes.Label * 1.5) + (plan.Top is null ? 2.5 : 3.4 * Sizes.Label) + 1;
@@ -180,7 +180,7 @@ public static class ChartLayout
             Add("grid",
             [
                 .. _plan.X.Ticks.Where(tick => tick.Text.Length > 0).Select(tick => _map.X(tick.At)).Where(x => x > Plot.Left + 0.1 && x < Plot.Right - 0.1).Select(x => new LineItem([new(x, Plot.Top), new(x, Plot.Bottom)], thin)),
-                .. _plan.Y.Ticks.Where(tick => tick.Text.Length > 0).Select(tick => _map.Y(tick.At)).Where(y => y > Plot.Top + 0.1 && y < Plot.Bottom - 0.1).Select(y => new LineItem([new(Plot.Left, y), new(Plot.Right, y)], thin)),
+                .. _plan.Y.Ticks.Where(tick => tick.Text.Length > 0 && !_plan.Y.IsNames).Select(tick => _map.Y(tick.At)).Where(y => y > Plot.Top + 0.1 && y < Plot.Bottom - 0.1).Select(y => new LineItem([new(Plot.Left, y), new(Plot.Right, y)], thin)),
             ]);
         }
 
@@ -354,16 +354,16 @@ public static class ChartLayout
 
         public void Labels()
         {
-            SeriesPlan[] labelled = [.. _plan.Series.Where(series => series.Label.Runs.Length > 0 && _visible[series].Length > 0)];
-            double size = labelled.Length == 0 ? Sizes.Label : Math.Clamp(Plot.Height / labelled.Length / 1.25, Math.Min(Sizes.Small, Sizes.Label), Sizes.Label);
+            List<SceneItem> texts = [.. KnownLabels()];
+            SeriesPlan[] labelled = [.. _plan.Series.Where(series => IsPlacedHere(series) && _visible[series].Length > 0)];
+            double usual = labelled.Length == 0 ? Sizes.Label : Math.Clamp(Plot.Height / labelled.Length / 1.25, Math.Min(Sizes.Small, Sizes.Label), Sizes.Label);
             LabelPlacement.Placed[] placed = LabelPlacement.Place(
-                [.. labelled.Select(series => new LabelPlacement.Wanted(ChartFont.Width(series.Label, size), size * 1.05, _visible[series][^1]))],
+                [.. labelled.Select(series => new LabelPlacement.Wanted(ChartFont.Width(series.Label, LabelSize(series, usual)), LabelSize(series, usual) * 1.05, _visible[series][^1]))],
                 Plot,
                 _columnLeft,
-                (Plot.Top - size, Plot.Bottom + size),
+                (Plot.Top - usual, Plot.Bottom + usual),
                 _obstacles);
             List<SceneItem> leaders = [];
-            List<SceneItem> texts = [];
             foreach ((int i, SeriesPlan series) in labelled.Index())
             {
                 if (!placed[i].Leader.IsEmpty)
@@ -372,12 +372,30 @@ public static class ChartLayout
                 }
 
                 PageBox box = placed[i].Box;
+                double size = LabelSize(series, usual);
                 texts.Add(Text(box.Left, box.Top + (0.82 * size), series.Label, size, Readable(series.Stroke.Ink)));
             }
 
             Add("leaders", leaders);
             Add("labels", texts);
         }
+
+        /// <summary>Labels whose place the plan knows.</summary>
+        private IEnumerable<TextItem> KnownLabels()
+        {
+            foreach (SeriesPlan series in _plan.Series.Where(series => series.LabelStart is not null && series.Label.Runs.Length > 0))
+            {
+                PagePoint at = _map.At(series.LabelStart!.Value);
+                TextItem text = Text(at.X + 1.4, at.Y + (0.35 * Sizes.Label), series.Label, Sizes.Label);
+                _obstacles.Add(ChartFont.Box(text));
+                yield return text;
+            }
+        }
+
+        private static bool IsPlacedHere(SeriesPlan series) => series.Label.Runs.Length > 0 && series.LabelStart is null;
+
+        /// <summary>Guides are named in small type.</summary>
+        private double LabelSize(SeriesPlan series, double usual) => series.IsGuide ? Math.Min(Sizes.Small, usual) : usual;
 
         public void Foot()
         {

@@ -43,10 +43,10 @@ internal static class LabelPlacement
             {
                 inColumn.Add(i);
             }
-            else if (BesideLine(labels[i], plot, taken, labels) is { } box)
+            else if (BesideLine(labels[i], plot, taken, labels) is { } beside)
             {
-                placed[i] = new Placed(box, []);
-                taken.Add(box.Grown(Gap / 2));
+                placed[i] = beside;
+                taken.Add(beside.Box.Grown(Gap / 2));
             }
             else
             {
@@ -102,20 +102,68 @@ internal static class LabelPlacement
     private static double Clamped(double middle, double height, (double Top, double Bottom) column)
         => Math.Max(column.Top + (height / 2), Math.Min(column.Bottom - (height / 2), middle));
 
-    private static PageBox? BesideLine(Wanted label, PageBox plot, List<PageBox> taken, IReadOnlyList<Wanted> lines)
+    private static Placed? BesideLine(Wanted label, PageBox plot, List<PageBox> taken, IReadOnlyList<Wanted> lines)
     {
         foreach (PageBox box in Candidates(label))
         {
-            PageBox wide = box.Grown(0.25);
-            if (wide.Left >= plot.Left + 0.5 && wide.Right <= plot.Right - 0.5 && wide.Top >= plot.Top + 0.5 && wide.Bottom <= plot.Bottom - 0.5
-                && !taken.Any(other => other.Overlaps(wide))
-                && !lines.Any(line => Crosses(line.Line, wide)))
+            if (IsFree(box))
             {
-                return box;
+                return new Placed(box, []);
+            }
+        }
+
+        // Further off, tied to its line by a short leader.
+        foreach ((PageBox box, PagePoint from) in Further(label))
+        {
+            PagePoint to = new(Math.Clamp(from.X, box.Left, box.Right), from.Y < box.Top ? box.Top : box.Bottom);
+
+            // A leader through another line would name the wrong one.
+            if (IsFree(box) && !lines.Any(line => !ReferenceEquals(line, label) && Meets(line.Line, from, to)))
+            {
+                return new Placed(box, [from, to]);
             }
         }
 
         return null;
+
+        bool IsFree(PageBox box)
+        {
+            PageBox wide = box.Grown(0.25);
+            return wide.Left >= plot.Left + 0.5 && wide.Right <= plot.Right - 0.5 && wide.Top >= plot.Top + 0.5 && wide.Bottom <= plot.Bottom - 0.5
+                && !taken.Any(other => other.Overlaps(wide))
+                && !lines.Any(line => Crosses(line.Line, wide));
+        }
+    }
+
+    private static bool Meets(ImmutableArray<PagePoint> line, PagePoint from, PagePoint to)
+    {
+        for (int i = 1; i < line.Length; i++)
+        {
+            (PagePoint a, PagePoint b) = (line[i - 1], line[i]);
+            if (Side(a, b, from) * Side(a, b, to) <= 0 && Side(from, to, a) * Side(from, to, b) <= 0)
+            {
+                return true;
+            }
+        }
+
+        return false;
+
+        static double Side(PagePoint a, PagePoint b, PagePoint p) => ((b.X - a.X) * (p.Y - a.Y)) - ((b.Y - a.Y) * (p.X - a.X));
+    }
+
+    private static IEnumerable<(PageBox Box, PagePoint From)> Further(Wanted label)
+    {
+        foreach (double away in new[] { 4.0, 6, 9, 12 })
+        {
+            foreach (double share in new[] { 0.9, 0.7, 0.5, 0.3, 0.1 })
+            {
+                PagePoint at = Along(label.Line, share);
+                yield return (new PageBox(at.X + (away / 2), at.Y - label.Height - away, label.Width, label.Height), at);
+                yield return (new PageBox(at.X - label.Width - (away / 2), at.Y + away, label.Width, label.Height), at);
+                yield return (new PageBox(at.X - label.Width - (away / 2), at.Y - label.Height - away, label.Width, label.Height), at);
+                yield return (new PageBox(at.X + (away / 2), at.Y + away, label.Width, label.Height), at);
+            }
+        }
     }
 
     private static IEnumerable<PageBox> Candidates(Wanted label)

@@ -7,10 +7,13 @@ namespace RedoxFurnace.Charts.Plans;
 /// <param name="Label">Quantity and unit.</param>
 /// <param name="Low">Left or lower end.</param>
 /// <param name="High">Right or upper end.</param>
-/// <param name="Ticks">Marked places, in the unit of the label.</param>
+/// <param name="Ticks">Marked places, in the unit of the label; their texts may hold marks as <see cref="RichText.Of"/> reads them.</param>
 public sealed record AxisPlan(RichText Label, double Low, double High, ImmutableArray<AxisTick> Ticks)
 {
     private const int UsualTicks = 8;
+
+    /// <summary>Whether the ticks name things (rows of bars) instead of measuring: then no grid goes through them.</summary>
+    public bool IsNames { get; init; }
 
     /// <summary>An axis with round numbers in a unit of its own: shown = factor x coordinate + shift.</summary>
     /// <param name="label">Quantity and unit.</param>

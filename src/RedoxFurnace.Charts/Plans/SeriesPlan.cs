@@ -29,4 +29,10 @@ public sealed record SeriesPlan
 
     /// <summary>Further columns of the value table beside x and y; one row for each point, or empty.</summary>
     public ImmutableArray<double> Uncertainty { get; init; } = [];
+
+    /// <summary>Whether it only guides the eye (a line of equal gas ratio): its label is small and gives way to the others.</summary>
+    public bool IsGuide { get; init; }
+
+    /// <summary>Where the label starts, in the coordinates of the plot, for charts that know its place (bars); null lets the layout find one.</summary>
+    public DataPoint? LabelStart { get; init; }
 }

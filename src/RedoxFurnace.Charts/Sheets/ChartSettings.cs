@@ -16,7 +16,7 @@ public sealed class ChartSettings
     /// <summary>Every key a sheet may hold, with what it says.</summary>
     public static IReadOnlyList<(string Key, string Meaning)> Keys { get; } =
     [
-        ("kind", "stability (default), oxygen-pressure, van-t-hoff, margins, gas-ratio, phases"),
+        ("kind", "stability (default), oxygen-pressure, van-t-hoff, margins"),
         ("title", "above the plot"),
         ("of", "metals and oxides, such as Cr,Fe,SiO2"),
         ("with", "reductants, such as C,H2,Al"),
@@ -36,7 +36,7 @@ public sealed class ChartSettings
         ("unit", "C, K or F"),
         ("energy", "kJ or kcal"),
         ("inverse", "1/T along the horizontal axis"),
-        ("ratios", "lines of equal gas ratio: CO/CO2 or H2/H2O"),
+        ("ratios", "lines of equal gas ratio: CO/CO2, H2/H2O or both"),
         ("equations", "reactions, parted by semicolons"),
         ("points", "measured points of a reaction: 900C 0.5; 1000C 0.8 (T and log10 K)"),
         ("charge", "what is charged, such as Cr2O3 1000kg, C 237kg"),

@@ -16,24 +16,9 @@ internal static class StabilityDrawing
 
     public static DrawnChart Draw(ChartSettings settings, SubstanceDatabase database, string version)
     {
-        (Temperature low, Temperature high) = settings.Read("range", ChartDrawing.Range, UsualRange);
-        string[] of = settings.Read<string[]>("of", (text, _) => [.. Names(text).Select(name => Known(name, database))], []);
-        string[] with = settings.Read<string[]>("with", (text, _) => [.. Names(text).Select(name => ReductantCatalogue.Of(database).Get(name).Id)], []);
-        StabilityRequest request = new([.. of], [.. with], low, high)
-        {
-            Direct = settings.Truth("direct"),
-            Monoxide = settings.Read<ImmutableArray<Pressure>>("pco", (text, what) => [.. PressureSeries.Parse(text, what).Points], []),
-            GasRatios = ChartDrawing.Ratios(settings),
-            Activities = ChartDrawing.ReadActivities(settings, database),
-        };
+        StabilityRequest request = Request(settings, database, UsualRange);
         StabilityResult result = StabilityLines.Of(request, database);
-        ImmutableArray<HazardNote> hazards = ChartDrawing.Hazards(database, new HazardWork
-        {
-            Charge = [.. result.Lines.Where(line => !line.IsReductant).SelectMany(line => line.Substances.Where(substance => substance.Formula.Of("O") > 0 && substance.Formula.Atoms.Count > 1)).Select(substance => substance.Id).Distinct()],
-            Reductants = with,
-            LowestKelvin = low.Kelvin,
-            HighestKelvin = high.Kelvin,
-        });
+        ImmutableArray<HazardNote> hazards = Hazards(result, database);
         StabilityChartOptions options = ChartDrawing.Common(
             new StabilityChartOptions
             {
@@ -55,6 +40,30 @@ internal static class StabilityDrawing
             hazards,
             result.Sources);
     }
+
+    /// <summary>The lines asked for.</summary>
+    internal static StabilityRequest Request(ChartSettings settings, SubstanceDatabase database, (Temperature Low, Temperature High) usual)
+    {
+        (Temperature low, Temperature high) = settings.Read("range", ChartDrawing.Range, usual);
+        string[] of = settings.Read<string[]>("of", (text, _) => [.. Names(text).Select(name => Known(name, database))], []);
+        string[] with = settings.Read<string[]>("with", (text, _) => [.. Names(text).Select(name => ReductantCatalogue.Of(database).Get(name).Id)], []);
+        return new StabilityRequest([.. of], [.. with], low, high)
+        {
+            Direct = settings.Truth("direct"),
+            Monoxide = settings.Read<ImmutableArray<Pressure>>("pco", (text, what) => [.. PressureSeries.Parse(text, what).Points], []),
+            GasRatios = ChartDrawing.Ratios(settings),
+            Activities = ChartDrawing.ReadActivities(settings, database),
+        };
+    }
+
+    /// <summary>What the lines drawn call for.</summary>
+    internal static ImmutableArray<HazardNote> Hazards(StabilityResult result, SubstanceDatabase database) => ChartDrawing.Hazards(database, new HazardWork
+    {
+        Charge = [.. result.Lines.Where(line => !line.IsReductant).SelectMany(line => line.Substances.Where(substance => substance.Formula.Of("O") > 0 && substance.Formula.Atoms.Count > 1)).Select(substance => substance.Id).Distinct()],
+        Reductants = result.Request.With,
+        LowestKelvin = result.Request.Low.Kelvin,
+        HighestKelvin = result.Request.High.Kelvin,
+    });
 
     private static string[] Names(string text) => text.Split(',', StringSplitOptions.TrimEntries | StringSplitOptions.RemoveEmptyEntries);
 
