@@ -13,6 +13,7 @@ public static class StabilityChart
 {
     private const double JoulesPerKilocalorie = 4184;
     private const int MostCrossings = 40;
+    private const int MostNamesInTitle = 12;
 
     private static readonly ImmutableArray<(StabilityMarkKind Kind, MarkShape Shape, string Text)> Marks =
     [
@@ -65,7 +66,7 @@ public static class StabilityChart
     }
 
     private static string Title(StabilityRequest request)
-        => "Stability of oxides: " + string.Join(", ", request.Of) + (request.With.IsEmpty ? "" : " with " + string.Join(", ", request.With));
+        => (request.Of.Length > MostNamesInTitle ? FormattableString.Invariant($"Stability of oxides of {request.Of.Length} metals") : "Stability of oxides: " + string.Join(", ", request.Of)) + (request.With.IsEmpty ? "" : " with " + string.Join(", ", request.With));
 
     private static (double Bottom, double Top) Extent(StabilityResult result, double perJoule, bool toZero)
     {
@@ -120,7 +121,8 @@ public static class StabilityChart
         return series.ToImmutable();
     }
 
-    private static bool IsLifted(StabilityLine line, string name) => line.Id == name || line.Element == name || line.Id.Split('/').Contains(name);
+    /// <summary>Whether a name means a line: its own, its metal's, or one side of the couple.</summary>
+    internal static bool IsLifted(StabilityLine line, string name) => line.Id == name || line.Element == name || line.Id.Split('/').Contains(name);
 
     private static RichText Listed(StabilityCrossing crossing, TemperatureUnit unit)
         => RichText.OfChemistry($"{crossing.Couple} and {crossing.Reductant}: {TemperatureAxis.Text(crossing.Kelvin, unit)}, reduces {(crossing.ReducesAbove ? "above" : "below")}");

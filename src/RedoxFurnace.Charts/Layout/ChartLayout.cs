@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using RedoxFurnace.Charts.Plans;
 using RedoxFurnace.Charts.Scenes;
 using RedoxFurnace.Charts.Writing;
+using RedoxFurnace.Quantities;
 
 namespace RedoxFurnace.Charts.Layout;
 
@@ -27,20 +28,26 @@ public static class ChartLayout
 
     /// <summary>How many labelled lines a page holds without crowding.</summary>
     /// <param name="plan">The plan.</param>
-    /// <returns>At least 1.</returns>
+    /// <returns>0 where the page has no room for a plot at all.</returns>
     public static int LinesThatFit(ChartPlan plan)
     {
         Sheet sheet = new(plan);
-        return Math.Max(1, (int)(sheet.Plot.Height / (sheet.Sizes.Small * 1.45)));
+        return sheet.HasRoom ? Math.Max(1, (int)(sheet.Plot.Height / (sheet.Sizes.Small * 1.45))) : 0;
     }
 
     /// <summary>Lays a plan out.</summary>
     /// <param name="plan">The plan.</param>
     /// <returns>The scene, the same for the same plan.</returns>
+    /// <exception cref="NoAnswerException">The page has no room for the plot.</exception>
     public static Scene Lay(ChartPlan plan)
     {
         ArgumentNullException.ThrowIfNull(plan);
         Sheet sheet = new(plan);
+        if (!sheet.HasRoom)
+        {
+            throw new NoAnswerException(FormattableString.Invariant($"a page of {plan.Page.Width:0.#} x {plan.Page.Height:0.#} mm has no room for this plot beside its caption; take a larger --size, fewer lines, or --frame none"));
+        }
+
         foreach (Action<Sheet> step in Steps)
         {
             step(sheet);
@@ -53,6 +60,8 @@ public static class ChartLayout
     private sealed class Sheet
     {
         private const double Margin = 7;
+        private const double LeastPlotWidth = 40;
+        private const double LeastPlotHeight = 28;
         private const double LeastRulerPitch = 17;
         private const double RulerScaleWidth = 4;
         private const double MarkSize = 2;
@@ -88,7 +97,8 @@ public static class ChartLayout
             double foot = (_lists.Sum(list => Rows(list)) * Sizes.Small * 1.45) + (_lists.Count * 1.2)
                 + (_caption.Length * Sizes.Small * 1.35) + (_caption.Length > 0 ? 1.5 : 0) + _blockHeight;
             double bottom = plan.Page.Height - Margin - foot - (3.6 * Sizes.Label);
-            Plot = new PageBox(left, top, Math.Max(20, right - left), Math.Max(20, bottom - top));
+            HasRoom = right - left >= LeastPlotWidth && bottom - top >= LeastPlotHeight;
+            Plot = new PageBox(left, top, Math.Max(1, right - left), Math.Max(1, bottom - top));
             _map = new PlotMap(Plot, plan.X.Low, plan.X.High, plan.Y.Low, plan.Y.High);
             _columnLeft = Plot.Right + 2;
             _footTop = Plot.Bottom + (3.6 * Sizes.Label);
@@ -97,6 +107,8 @@ public static class ChartLayout
         public TypeSizes Sizes { get; }
 
         public PageBox Plot { get; }
+
+        public bool HasRoom { get; }
 
         public Scene Finish() => new(
             _plan.Page.Width,
@@ -109,13 +121,31 @@ public static class ChartLayout
 
         public void Heading()
         {
-            List<SceneItem> items = [Text(Margin, Margin + (0.8 * Sizes.Title), _plan.Title, Sizes.Title, bold: true)];
+            (RichText title, double size) = FittedTitle();
+            List<SceneItem> items = [Text(Margin, Margin + (0.8 * Sizes.Title), title, size, bold: true)];
             if (_plan.Subtitle is { } subtitle)
             {
                 items.Add(Text(Margin, Margin + Sizes.Title + (1.3 * Sizes.Label), subtitle, Sizes.Label, Ink.Quiet));
             }
 
             Add("title", items);
+        }
+
+        /// <summary>A long title is set smaller, down to the size of the labels, then cut at a word.</summary>
+        private (RichText Title, double Size) FittedTitle()
+        {
+            double room = _plan.Page.Width - (2 * Margin);
+            double size = Math.Clamp(Sizes.Title * room / Math.Max(room, ChartFont.Width(_plan.Title, Sizes.Title, bold: true)), Sizes.Label, Sizes.Title);
+            string plain = _plan.Title.Plain;
+            RichText title = _plan.Title;
+            while (ChartFont.Width(title, size, bold: true) > room && plain.Length > 1)
+            {
+                int space = plain.LastIndexOf(' ');
+                plain = plain[..(space > 0 ? space : plain.Length - 1)];
+                title = RichText.OfChemistry(plain + " …");
+            }
+
+            return (title, size);
         }
 
         public void Windows()
@@ -230,7 +260,7 @@ public static class ChartLayout
                 new LineItem([new(Plot.Left, Plot.Top), new(Plot.Left, Plot.Bottom), new(Plot.Right, Plot.Bottom)], axis),
             ];
             double size = Sizes.Label;
-            foreach (AxisTick tick in _plan.X.Ticks)
+            foreach (AxisTick tick in Spaced(_plan.X.Ticks, size))
             {
                 double x = _map.X(tick.At);
                 items.Add(new LineItem([new(x, Plot.Bottom), new(x, Plot.Bottom + (tick.Text.Length > 0 ? 1.2 : 0.7))], axis));
@@ -245,14 +275,15 @@ public static class ChartLayout
                 items.Add(Text(Plot.Left - 1.7, y + (0.35 * size), RichText.Of(tick.Text), size, anchor: TextAnchor.End));
             }
 
-            items.Add(new TextItem(new PagePoint(Margin + (0.8 * size), 0.5 * (Plot.Top + Plot.Bottom)), _plan.Y.Label, size, TextAnchor.Middle, Ink.Black, false, 90));
+            double upright = Math.Min(size, size * (Plot.Height + (2 * size)) / ChartFont.Width(_plan.Y.Label, size));
+            items.Add(new TextItem(new PagePoint(Margin + (0.8 * size), 0.5 * (Plot.Top + Plot.Bottom)), _plan.Y.Label, upright, TextAnchor.Middle, Ink.Black, false, 90));
             if (_plan.Top is { } top)
             {
                 items.Add(new LineItem([new(Plot.Left, Plot.Top), new(Plot.Right, Plot.Top)], axis));
-                foreach (AxisTick tick in top.Ticks)
+                foreach (AxisTick tick in Spaced(top.Ticks, size))
                 {
                     double x = _map.X(tick.At);
-                    items.Add(new LineItem([new(x, Plot.Top), new(x, Plot.Top - 1.2)], axis));
+                    items.Add(new LineItem([new(x, Plot.Top), new(x, Plot.Top - (tick.Text.Length > 0 ? 1.2 : 0.7))], axis));
                     items.Add(Text(x, Plot.Top - 1.8, RichText.Of(tick.Text), size, anchor: TextAnchor.Middle));
                 }
 
@@ -260,6 +291,38 @@ public static class ChartLayout
             }
 
             Add("axes", items.Where(item => item is not TextItem { Text.Runs.IsEmpty: true }));
+        }
+
+        /// <summary>Every second, third... number keeps its text where all would touch; the others stay as small ticks.</summary>
+        private IEnumerable<AxisTick> Spaced(ImmutableArray<AxisTick> ticks, double size)
+        {
+            AxisTick[] written = [.. ticks.Where(tick => tick.Text.Length > 0)];
+            int stride = 1;
+            while (stride < written.Length && Touch(stride))
+            {
+                stride++;
+            }
+
+            HashSet<double> kept = [.. written.Where((_, i) => i % stride == 0).Select(tick => tick.At)];
+            return ticks.Select(tick => kept.Contains(tick.At) ? tick : tick with { Text = "" });
+
+            bool Touch(int every)
+            {
+                double free = double.NegativeInfinity;
+                for (int i = 0; i < written.Length; i += every)
+                {
+                    double half = ChartFont.Width(written[i].Text, size) / 2;
+                    double x = _map.X(written[i].At);
+                    if (x - half < free)
+                    {
+                        return true;
+                    }
+
+                    free = x + half + (0.5 * size);
+                }
+
+                return false;
+            }
         }
 
         public void Rulers()

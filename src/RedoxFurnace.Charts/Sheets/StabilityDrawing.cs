@@ -80,19 +80,44 @@ internal static class StabilityDrawing
         }
 
         ImmutableArray<StabilityLine> reductants = [.. result.Lines.Where(line => line.IsReductant)];
-        StabilityLine[][] parts = [.. result.Lines.Where(line => !line.IsReductant).Chunk(Math.Max(1, fit - reductants.Length))];
-        return (
-            [
-                .. parts.Select((part, i) =>
-                {
-                    HashSet<string> ids = [.. part.Select(line => line.Id)];
-                    StabilityResult own = result with { Lines = [.. part, .. reductants], Crossings = [.. result.Crossings.Where(crossing => ids.Contains(crossing.Couple))] };
-                    StabilityChartOptions titled = options with { Title = FormattableString.Invariant($"{whole.Title.Plain} (part {i + 1} of {parts.Length})"), Highlight = own.Lines.Any(line => line.Id == options.Highlight) ? options.Highlight : null };
-                    return ChartLayout.Lay(StabilityChart.Plan(own, titled, database));
-                }),
-            ],
-            FormattableString.Invariant($"{result.Lines.Length} lines are more than one page of this size can label ({fit}): spread over {parts.Length} pages; a larger --size or fewer names keep them together"));
+        int couples = result.Lines.Length - reductants.Length;
+        for (int pages = 2; pages <= couples; pages++)
+        {
+            ChartPlan[] plans = [.. Parts(result, reductants, pages, database).Select((part, i) => Part(part, whole.Title.Plain, i + 1, pages, options, database))];
+            if (plans.All(plan => plan.Series.Length <= ChartLayout.LinesThatFit(plan)))
+            {
+                return (
+                    [.. plans.Select(ChartLayout.Lay)],
+                    FormattableString.Invariant($"{result.Lines.Length} lines are more than one page of this size can label ({fit}): spread over {pages} pages; a larger --size or fewer names keep them together"));
+            }
+        }
+
+        // No way of spreading them helps: the layout says what is missing, or crowds a single couple with its reductants.
+        return ([ChartLayout.Lay(whole)], null);
     }
+
+    /// <summary>Couples shared out evenly, every reductant on each page, and of the sources those of the page.</summary>
+    private static IEnumerable<StabilityResult> Parts(StabilityResult result, ImmutableArray<StabilityLine> reductants, int pages, SubstanceDatabase database)
+    {
+        StabilityLine[] couples = [.. result.Lines.Where(line => !line.IsReductant)];
+        for (int page = 0; page < pages; page++)
+        {
+            ImmutableArray<StabilityLine> own = [.. couples[(page * couples.Length / pages)..((page + 1) * couples.Length / pages)]];
+            HashSet<string> ids = [.. own.Select(line => line.Id)];
+            ImmutableArray<StabilityLine> lines = [.. own, .. reductants];
+            yield return result with { Lines = lines, Crossings = [.. result.Crossings.Where(crossing => ids.Contains(crossing.Couple))], Sources = StabilityLines.SourcesOf(lines, database) };
+        }
+    }
+
+    private static ChartPlan Part(StabilityResult part, string title, int page, int pages, StabilityChartOptions options, SubstanceDatabase database)
+        => StabilityChart.Plan(
+            part,
+            options with
+            {
+                Title = FormattableString.Invariant($"{title} (part {page} of {pages})"),
+                Highlight = part.Lines.Any(line => options.Highlight is { } name && StabilityChart.IsLifted(line, name)) ? options.Highlight : null,
+            },
+            database);
 
     private static string Headline(StabilityResult result)
     {

@@ -43,7 +43,7 @@ public static class PngWriter
         SkiaPainter.Paint(canvas, scene);
         canvas.Flush();
         using SKPixmap pixels = bitmap.PeekPixels()!;
-        using SKData data = pixels.Encode(new SKPngEncoderOptions(SKPngEncoderFilterFlags.Sub, 6))!;
+        using SKData data = pixels.Encode(new SKPngEncoderOptions(SKPngEncoderFilterFlags.None, 3))!;
         return WithResolution(data.ToArray(), dpi);
     }
 

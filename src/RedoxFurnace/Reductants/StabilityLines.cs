@@ -47,13 +47,14 @@ public static class StabilityLines
         return new StabilityResult(
             request,
             lines,
-            [.. couples.SelectMany(couple => reductants.SelectMany(reductant => Crossings(couple, reductant)))],
+            [.. couples.SelectMany(couple => reductants.Where(reductant => reductant.Element != couple.Element).SelectMany(reductant => Crossings(couple, reductant)))],
             [.. notes.Distinct()],
             SourcesOf(lines, database),
             database.Hash);
     }
 
-    private static ImmutableArray<string> SourcesOf(IEnumerable<StabilityLine> lines, SubstanceDatabase database)
+    /// <summary>Citations in full of lines.</summary>
+    internal static ImmutableArray<string> SourcesOf(IEnumerable<StabilityLine> lines, SubstanceDatabase database)
         => [.. lines.SelectMany(line => line.Substances).Distinct()
             .SelectMany(substance => substance.Phases.Select(phase => phase.SourceKey).Append(substance.Uncertainty.SourceKey).OfType<string>())
             .Distinct().Order(StringComparer.Ordinal).Select(key => database.Sources[key].Text)];
