@@ -157,7 +157,7 @@ public sealed class GasEquilibrium
             return (null, problem.Solve(graphite: true, x, guess: false));
         }
 
-        bool richInOxygen = amounts[GasBalances.Oxygen] - amounts[GasBalances.Carbon] > 0.02 * amounts[GasBalances.Carbon];
+        bool richInOxygen = amounts[GasBalances.BeyondMonoxide] > 0.02 * amounts[GasBalances.Carbon];
         if (richInOxygen && problem.TrySolve(graphite: false, x, guess: false) is { } first)
         {
             return first.NaturalLogCarbonActivity <= 0 ? (first, first) : (first, problem.Solve(graphite: true, x, guess: false));
@@ -278,10 +278,10 @@ public sealed class GasEquilibrium
             moles = moles > 0 ? moles : Math.Max(oxygen, 1e-300);
             x[4] = Math.Log(moles) - _logPressure;
             x[3] = HasNitrogen ? Math.Log(nitrogen) - x[4] : 0;
-            if (attempt == 0 && !graphite && oxygen > carbon && carbon + hydrogen > 0)
+            if (attempt == 0 && !graphite && _amounts[GasBalances.BeyondMonoxide] > 0 && carbon + hydrogen > 0)
             {
                 GasShift shift = new(
-                    carbon, hydrogen, oxygen - carbon, _amounts[GasBalances.Burnt], carbon + hydrogen + nitrogen + _inert, _logPressure,
+                    carbon, hydrogen, _amounts[GasBalances.BeyondMonoxide], _amounts[GasBalances.Burnt], carbon + hydrogen + nitrogen + _inert, _logPressure,
                     _logK[(int)GasSpecies.CO2] - _logK[(int)GasSpecies.CO], _logK[(int)GasSpecies.H2O]);
                 double v = shift.Solve();
                 double u = shift.HalfLogOxygen(v);
@@ -295,11 +295,11 @@ public sealed class GasEquilibrium
             }
 
             double slack = _amounts[GasBalances.CarbonSlack];
-            if (attempt == 0 && !graphite && HasHydrogen && carbon > oxygen)
+            if (attempt == 0 && !graphite && HasHydrogen && _amounts[GasBalances.BeyondMonoxide] < 0)
             {
                 // Hot and short of oxygen: CO takes the oxygen, CH4 the other carbon, and H2 is what is left.
                 x[1] = Math.Log(slack) - x[4];
-                x[0] = Math.Log(carbon - oxygen) - x[4] - _logK[(int)GasSpecies.CH4] - (2 * x[1]);
+                x[0] = Math.Log(-_amounts[GasBalances.BeyondMonoxide]) - x[4] - _logK[(int)GasSpecies.CH4] - (2 * x[1]);
                 x[2] = HasOxygen ? Math.Log(oxygen) - x[4] - _logK[(int)GasSpecies.CO] - x[0] : 0;
                 return;
             }
@@ -341,8 +341,8 @@ public sealed class GasEquilibrium
         private GasState? State(GasNewton newton, ReadOnlySpan<bool> present, bool graphite, ReadOnlySpan<double> x)
         {
             double[] logs = new double[GasMixture.SpeciesCount];
+            Span<double> moles = stackalloc double[GasFormation.Reacting];
             double total = _inert;
-            double carbonInGas = 0;
             for (int i = 0; i < logs.Length; i++)
             {
                 if (i >= GasFormation.Reacting)
@@ -352,13 +352,12 @@ public sealed class GasEquilibrium
                 }
 
                 double log = present[i] ? newton.LogMoles(i, x) : double.NegativeInfinity;
-                double moles = Math.Exp(log);
-                total += moles;
-                carbonInGas += GasBalances.WeightsOf(GasBalances.Carbon)[i] * moles;
+                moles[i] = Math.Exp(log);
+                total += moles[i];
                 logs[i] = log - x[4];
             }
 
-            double deposited = graphite ? _amounts[GasBalances.Carbon] - carbonInGas : 0;
+            double deposited = graphite ? GasBalances.Graphite(_amounts, moles) : 0;
 
             // Below 0 the state is no answer, it only says that graphite is not stable.
             double imbalance = deposited < 0 ? 0 : Imbalance(_mixture, logs, -x[4], deposited);

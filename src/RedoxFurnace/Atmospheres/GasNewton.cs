@@ -92,15 +92,23 @@ internal ref struct GasNewton
         double merit = Evaluate(x, residual, jacobian, size);
         for (int iteration = 0; iteration < MostSteps; iteration++)
         {
-            if (merit < Within)
-            {
-                return true;
-            }
-
+            bool isLast = merit < Within;
             residual[..size].CopyTo(step);
             if (!TryEliminate(jacobian, step, size))
             {
-                return false;
+                return isLast;
+            }
+
+            if (isLast)
+            {
+                // One step more costs little and leaves only rounding, which several equations cannot add up to a visible imbalance.
+                Move(x, step, 1, trial);
+                if (Evaluate(trial, residual, jacobian, size) < merit)
+                {
+                    trial.CopyTo(x);
+                }
+
+                return true;
             }
 
             double length = 1;
