@@ -79,7 +79,7 @@ public static class SideScales
             RichText.Of(label),
             pivot,
             new DataPoint(0, intercept * perJoule),
-            [.. Enumerable.Range(-14, 33).Select(exponent => (
+            [.. Enumerable.Range(-14, 75).Select(exponent => (
                 exponent == 0 ? RichText.Of("1") : RichText.Of("10^{" + RoundTicks.Number(exponent, 1) + "}"),
                 (slope - (2 * PhysicalConstants.GasConstant * Math.Log(10) * exponent)) * perJoule))]);
     }

@@ -62,6 +62,7 @@ public static class ChartLayout
         private const double Margin = 7;
         private const double LeastPlotWidth = 40;
         private const double LeastPlotHeight = 28;
+        private const double LeastPlotAboveFlats = 55;
         private const double LeastRulerPitch = 17;
         private const double RulerScaleWidth = 4;
         private const double MarkSize = 2;
@@ -79,6 +80,7 @@ public static class ChartLayout
         private readonly double _blockHeight;
         private readonly double _footTop;
         private readonly double _rulerPitch;
+        private readonly bool _hasFlats;
         private int _numbered;
 
         public Sheet(ChartPlan plan)
@@ -97,14 +99,20 @@ public static class ChartLayout
             double foot = (_lists.Sum(list => Rows(list)) * Sizes.Small * 1.45) + (_lists.Count * 1.2)
                 + (_caption.Length * Sizes.Small * 1.35) + (_caption.Length > 0 ? 1.5 : 0) + _blockHeight;
             double bottom = plan.Page.Height - Margin - foot - (3.6 * Sizes.Label);
+            double flats = FlatRulers(plan) * FlatPitch;
+            _hasFlats = flats > 0 && bottom - flats - top >= LeastPlotAboveFlats;
+            bottom -= _hasFlats ? flats : 0;
             HasRoom = right - left >= LeastPlotWidth && bottom - top >= LeastPlotHeight;
             Plot = new PageBox(left, top, Math.Max(1, right - left), Math.Max(1, bottom - top));
             _map = new PlotMap(Plot, plan.X.Low, plan.X.High, plan.Y.Low, plan.Y.High);
             _columnLeft = Plot.Right + 2;
-            _footTop = Plot.Bottom + (3.6 * Sizes.Label);
+            _footTop = Plot.Bottom + (3.6 * Sizes.Label) + (_hasFlats ? flats : 0);
         }
 
         public TypeSizes Sizes { get; }
+
+        /// <summary>Height of the part of a side scale that runs below the plot.</summary>
+        private double FlatPitch => (2.1 * Sizes.Small) + 1.2;
 
         public PageBox Plot { get; }
 
@@ -325,33 +333,36 @@ public static class ChartLayout
             }
         }
 
+        /// <summary>Scales with values whose rays leave the plot at its foot; a scale of frost points has none so dry.</summary>
+        private static int FlatRulers(ChartPlan plan) => plan.Rulers.Count(ruler => RunsOn(plan, ruler));
+
+        private static bool RunsOn(ChartPlan plan, RulerPlan ruler) => ruler.Slopes.Any(tick => ruler.Pivot.Y + (tick.Slope * (plan.X.High - ruler.Pivot.X)) < plan.Y.Low);
+
+        /// <summary>
+        /// Each side scale runs down beside the plot and on below it, so that the steep rays of strong oxides, which leave the plot
+        /// at its foot, are read too. The outermost is the lowest.
+        /// </summary>
         public void Rulers()
         {
+            int flat = 0;
             foreach ((int index, RulerPlan ruler) in _plan.Rulers.Index())
             {
                 double x = _plan.Page.Width - Margin - (_rulerPitch * (_plan.Rulers.Length - index)) + RulerScaleWidth;
-                double run = _map.DataX(x) - ruler.Pivot.X;
-                Stroke line = new(Ink.Quiet, 0.2);
-                List<SceneItem> items = [new LineItem([new(x, Plot.Top), new(x, Plot.Bottom)], line)];
-                double lastText = double.NegativeInfinity;
-                foreach ((RichText text, double slope) in ruler.Slopes.OrderBy(tick => _map.Y(ruler.Pivot.Y + (tick.Slope * run))))
+                bool runsOn = _hasFlats && RunsOn(_plan, ruler);
+                double foot = runsOn ? Plot.Bottom + (3.3 * Sizes.Label) + (flat++ * FlatPitch) : Plot.Bottom;
+                List<SceneItem> items = [new LineItem(runsOn ? [new(x, Plot.Top), new(x, foot), new(Plot.Left, foot)] : [new(x, Plot.Top), new(x, foot)], new Stroke(Ink.Quiet, 0.2))];
+                items.AddRange(UprightTicks(ruler, x, foot));
+                if (runsOn)
                 {
-                    double y = _map.Y(ruler.Pivot.Y + (slope * run));
-                    if (y < Plot.Top - 1e-6 || y > Plot.Bottom + 1e-6)
-                    {
-                        continue;
-                    }
-
-                    bool written = text.Runs.Length > 0 && y - lastText > Sizes.Small * 1.15;
-                    items.Add(new LineItem([new(x, y), new(x + (written ? 1.3 : 0.7), y)], line));
-                    if (written)
-                    {
-                        items.Add(Text(x + 1.8, y + (0.35 * Sizes.Small), text, Sizes.Small, Ink.Quiet));
-                        lastText = y;
-                    }
+                    items.AddRange(FlatTicks(ruler, x, foot));
                 }
 
                 items.Add(Text(x - (RulerScaleWidth / 2), Plot.Top - 1.4, ruler.Label, Sizes.Small, Ink.Black));
+                if (runsOn && ChartFont.Width(ruler.Label, Sizes.Small) < Plot.Left - Margin - 1.7)
+                {
+                    items.Add(Text(Plot.Left - 1.7, foot + (0.35 * Sizes.Small), ruler.Label, Sizes.Small, Ink.Black, TextAnchor.End));
+                }
+
                 PagePoint pivot = _map.At(ruler.Pivot);
                 if (Plot.Grown(0.5).Holds(pivot))
                 {
@@ -362,6 +373,56 @@ public static class ChartLayout
                 }
 
                 Add(ruler.Name, items);
+            }
+        }
+
+        private IEnumerable<SceneItem> UprightTicks(RulerPlan ruler, double x, double foot)
+        {
+            double run = _map.DataX(x) - ruler.Pivot.X;
+            Stroke line = new(Ink.Quiet, 0.2);
+            double lastText = double.NegativeInfinity;
+            foreach ((RichText text, double slope) in ruler.Slopes.OrderBy(tick => _map.Y(ruler.Pivot.Y + (tick.Slope * run))))
+            {
+                double y = _map.Y(ruler.Pivot.Y + (slope * run));
+                if (y < Plot.Top - 1e-6 || y > foot + 1e-6)
+                {
+                    continue;
+                }
+
+                bool written = text.Runs.Length > 0 && y - lastText > Sizes.Small * 1.15 && y < foot - (0.6 * Sizes.Small);
+                yield return new LineItem([new(x, y), new(x + (written ? 1.3 : 0.7), y)], line);
+                if (written)
+                {
+                    yield return Text(x + 1.8, y + (0.35 * Sizes.Small), text, Sizes.Small, Ink.Quiet);
+                    lastText = y;
+                }
+            }
+        }
+
+        /// <summary>From the corner to the left, where values crowd: small ticks end where they would touch.</summary>
+        private IEnumerable<SceneItem> FlatTicks(RulerPlan ruler, double right, double y)
+        {
+            double fall = _map.DataY(y) - ruler.Pivot.Y;
+            Stroke line = new(Ink.Quiet, 0.2);
+            double lastText = right;
+            double lastTick = right;
+            foreach ((RichText text, double slope) in ruler.Slopes.Where(tick => tick.Slope < 0).OrderByDescending(tick => tick.Slope))
+            {
+                double x = _map.X(ruler.Pivot.X + (fall / slope));
+                double half = ChartFont.Width(text, Sizes.Small) / 2;
+                bool written = text.Runs.Length > 0 && x + half < lastText - 1 && x - half > Plot.Left;
+                if (x > right || x < Plot.Left || (!written && lastTick - x < 0.8))
+                {
+                    continue;
+                }
+
+                lastTick = x;
+                yield return new LineItem([new(x, y), new(x, y + (written ? 1.0 : 0.6))], line);
+                if (written)
+                {
+                    yield return Text(x, y + 1.2 + (0.85 * Sizes.Small), text, Sizes.Small, Ink.Quiet, TextAnchor.Middle);
+                    lastText = x - half;
+                }
             }
         }
 

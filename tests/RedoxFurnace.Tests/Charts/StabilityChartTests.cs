@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Text;
 using System.Xml.Linq;
 using RedoxFurnace.Charts.Kinds;
@@ -121,6 +122,44 @@ public class StabilityChartTests
             double step = ticks[1].Slope - ticks[0].Slope;
             return first + ((ratio + 14) * step);
         }
+    }
+
+    /// <summary>
+    /// On the page as laid out: a straight edge from the pivot through a point of known pO2 meets the tick that bears that value, on the upright part of the
+    /// scale or below the plot, within 1 % of the axis.
+    /// </summary>
+    [Fact]
+    public void A_straight_edge_on_the_page_meets_the_tick_of_the_value()
+    {
+        Scene scene = Draw("Al,Ca,Cr,Fe", "", new StabilityChartOptions { Scales = ["pO2", "CO/CO2", "H2/H2O"] });
+        ImmutableArray<PagePoint> axes = scene.Groups.Single(group => group.Name == "axes").Items.OfType<LineItem>().First().Points;
+        PageBox plot = new(axes[0].X, axes[0].Y, axes[2].X - axes[0].X, axes[1].Y - axes[0].Y);
+        ChartPlan plan = StabilityChart.Plan(Lines("Al,Ca,Cr,Fe", ""), new StabilityChartOptions { Scales = ["pO2", "CO/CO2", "H2/H2O"] }, SubstanceDatabase.Bundled);
+        ImmutableArray<SceneItem> items = scene.Groups.Single(group => group.Name == "scale of pO2").Items;
+        PagePoint pivot = items.OfType<MarkItem>().Single().Center;
+        const double kelvin = 900;
+        int upright = 0;
+        int flat = 0;
+        for (int i = 1; i < items.Length; i++)
+        {
+            if (items[i] is not TextItem text || items[i - 1] is not LineItem { Points.Length: 2 } tick || !double.TryParse(text.Text.Plain.Replace('\u2212', '-'), System.Globalization.CultureInfo.InvariantCulture, out double log))
+            {
+                continue;
+            }
+
+            double potential = PhysicalConstants.GasConstant * kelvin * Math.Log(10) * log / 1000;
+            PagePoint through = new(
+                plot.Left + ((kelvin - plan.X.Low) / (plan.X.High - plan.X.Low) * plot.Width),
+                plot.Bottom - ((potential - plan.Y.Low) / (plan.Y.High - plan.Y.Low) * plot.Height));
+            PagePoint at = tick.Points[0];
+            double slope = (through.Y - pivot.Y) / (through.X - pivot.X);
+            bool below = tick.Points[1].X == at.X;
+            double off = below ? at.X - (pivot.X + ((at.Y - pivot.Y) / slope)) : at.Y - (pivot.Y + (slope * (at.X - pivot.X)));
+            Assert.True(Math.Abs(off) <= 0.01 * (below ? plot.Width : plot.Height), $"log pO2 {log}: {off} mm off");
+            (upright, flat) = below ? (upright, flat + 1) : (upright + 1, flat);
+        }
+
+        Assert.True(upright > 5 && flat > 5, $"{upright} values beside and {flat} below the plot");
     }
 
     [Fact]
