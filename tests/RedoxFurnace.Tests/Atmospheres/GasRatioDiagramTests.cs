@@ -51,6 +51,28 @@ public class GasRatioDiagramTests
         Assert.Equal(685, crossing - 273.15, 30.0);
     }
 
+    /// <summary>FeO stands above about 570 C only, and near 850 C one pass can use only about one third of H2 or CO (common practice, no source).</summary>
+    [Fact]
+    public void One_pass_over_wustite_uses_about_a_third_of_the_gas()
+    {
+        GasRatioDiagram iron = Diagram("Fe");
+        foreach (GasRatioBoundary boundary in new[] { iron.Monoxide.Single(line => line.Couple == "Fe/wustite"), iron.Hydrogen.Single(line => line.Couple == "Fe/wustite") })
+        {
+            double share = boundary.Points.Single(point => Math.Abs(point.Kelvin - 273.15 - 850) < 0.01).Share;
+            Assert.Equal(1.0 / 3, 1 - share, 0.05);
+        }
+    }
+
+    [Fact]
+    public void Monoxide_and_hydrogen_read_alike_where_the_water_gas_constant_is_one()
+    {
+        // Near 820 C; the published constants 1.44 at 1000 K and 0.729 at 1200 K (NIST-JANAF, from memory) put K = 1 at 1092 to 1100 K.
+        GasRatioDiagram iron = Diagram("Fe");
+        GasRatioPoint[] monoxide = [.. iron.Monoxide.Single(line => line.Couple == "Fe/wustite").Points];
+        double alike = monoxide.Zip(iron.Hydrogen.Single(line => line.Couple == "Fe/wustite").Points).MinBy(pair => Math.Abs(pair.First.Share - pair.Second.Share)).First.Kelvin;
+        Assert.InRange(alike - 273.15, 800, 840);
+    }
+
     [Fact]
     public void A_reversed_range_is_refused() => Assert.Throws<RequestException>(() =>
         GasRatioDiagram.Of("Fe", Temperature.FromCelsius(900), Temperature.FromCelsius(400), 25, [], Activities.AllOne, GasSamples.Database));

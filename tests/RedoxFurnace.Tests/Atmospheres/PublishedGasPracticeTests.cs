@@ -28,6 +28,14 @@ public class PublishedGasPracticeTests
             case "G6-020":
                 Tolerance.AssertWithin(row.Number("value"), row["tolerance"], Chromium("H2 10%, N2 90%, frost -40C", 1120, 3).LimitLogOxygen!.Value / Math.Log(10));
                 break;
+            case "G6-022":
+                // Above 400 C; H2O/H2 of 3 for copper and nickel, 0.3 for iron, which needs it hotter.
+                Assert.Contains("0.3 (Fe)", row["conditions"], StringComparison.Ordinal);
+                Assert.Equal(BrightVerdict.Bright, Element("Cu", "H2 25%, H2O 75%", 400).Verdict);
+                Assert.Equal(BrightVerdict.Bright, Element("Ni", "H2 25%, H2O 75%", 400).Verdict);
+                Assert.Equal(BrightVerdict.Oxidises, Element("Fe", "H2 25%, H2O 75%", 400).Verdict);
+                Assert.Equal(BrightVerdict.Bright, Element("Fe", "H2 76.92%, H2O 23.08%", 700).Verdict);
+                break;
             default:
                 Assert.Fail($"no check is written for {id}");
                 break;
@@ -35,11 +43,16 @@ public class PublishedGasPracticeTests
     }
 
     private static MetalInGas Chromium(string gas, double celsius, double percent)
+        => Judge("Cr", FormattableString.Invariant($"Cr={percent}%,Fe"), gas, celsius);
+
+    private static MetalInGas Element(string symbol, string gas, double celsius) => Judge(symbol, symbol + "=1", gas, celsius);
+
+    private static MetalInGas Judge(string symbol, string parts, string gas, double celsius)
     {
         GasMixture mixture = GasSamples.Parse(gas);
         GasState state = GasSamples.Equilibrium.AsAnalysed(mixture, Temperature.FromCelsius(celsius), GasSamples.Atmosphere);
         return new MetalsInGas(GasSamples.Database)
-            .Judge(Alloy.Parse(FormattableString.Invariant($"Cr={percent}%,Fe"), null, GasSamples.Database), state, mixture)
-            .Single(metal => metal.Element.Symbol == "Cr");
+            .Judge(Alloy.Parse(parts, null, GasSamples.Database), state, mixture)
+            .Single(metal => metal.Element.Symbol == symbol);
     }
 }
