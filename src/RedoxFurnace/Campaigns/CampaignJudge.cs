@@ -302,10 +302,11 @@ internal sealed class CampaignJudge(SubstanceDatabase database)
         string made = $"at {Printed.Brief(flow)} Nm3/h the {ruling.Couple} step leaves {Percent(ruling.Made)} oxidised gas where the balance at {soak.At} allows {Percent(ruling.BalanceLow)} to {Percent(ruling.BalanceHigh)}";
         (JobVerdict verdict, string condition) = ruling.Made <= ruling.BalanceLow
             ? (JobVerdict.Works, "")
-            : ruling.Made <= ruling.BalanceHigh
+            : ruling.Made <= ruling.Balance
                 ? (JobVerdict.WorksIf, $"the flow is raised well above {Printed.Fixed(used.LeastFlow, 1)} Nm3/h: the margin is smaller than its uncertainty")
                 : (JobVerdict.DoesNotWork, "");
-        string stays = verdict == JobVerdict.DoesNotWork ? $"; {ruling.Couple.Split('/')[^1]} stays; the least flow is {Printed.Fixed(used.LeastFlow, 1)} Nm3/h" : "";
+        string within = verdict == JobVerdict.DoesNotWork && ruling.Made <= ruling.BalanceHigh ? ", by less than its uncertainty: count on no" : "";
+        string stays = verdict == JobVerdict.DoesNotWork ? $"; {ruling.Couple.Split('/')[^1]} stays{within}; the least flow is {Printed.Fixed(used.LeastFlow, 1)} Nm3/h" : "";
         return new Judgement(
             verdict,
             condition,
@@ -465,9 +466,10 @@ internal sealed class CampaignJudge(SubstanceDatabase database)
         string pressure = Pressure.FromNaturalLogBar(vapour[0].NaturalLogBar).ToString();
         MetalVapourOverCharge late = vapour.LastOrDefault(point => point.NaturalLogBar > line.NaturalLogBar) ?? vapour[0];
         MetalVapourOverCharge? stuck = vapour.FirstOrDefault(point => point.NaturalLogBar <= line.NaturalLogBar);
+        string within = main.Verdict == "borderline" ? " by less than the uncertainty (count on no)" : "";
         (JobVerdict verdictOfAll, string condition, string reason) = main.Verdict switch
         {
-            "does-not-work" => (JobVerdict.DoesNotWork, "", $"the line stands at {line}, above the {metal} pressure of the charge ({pressure} at {soak.At}): no {metal} comes over; the least vacuum that drives it is below {pressure}"),
+            "does-not-work" or "borderline" when main.Margin < 0 => (JobVerdict.DoesNotWork, "", $"the line stands at {line}, above the {metal} pressure of the charge ({pressure} at {soak.At}){within}: no {metal} comes over; the least vacuum that drives it is below {pressure}"),
             "borderline" => (JobVerdict.WorksIf, $"the line is brought well below {pressure}", $"the line at {line} is within the uncertainty of the {metal} pressure of the charge ({pressure})"),
             _ when stuck is not null && stuck.Drawn < 0.95 => (JobVerdict.WorksIf, $"a yield near {Printed.Fixed(100 * (late.Drawn + stuck.Drawn) / 2, 0)} % is enough", $"{metal} comes over at {pressure} at first; once part is drawn off {string.Join(" and ", stuck.Phases)} hold the rest at {Pressure.FromNaturalLogBar(stuck.NaturalLogBar)}, below what the line at {line} can drive"),
             _ => (JobVerdict.Works, "", $"{metal} vapour stands at {pressure} over the charge at {soak.At}, {Printed.Brief(Math.Exp(vapour[0].NaturalLogBar - line.NaturalLogBar))} times the line pressure of {line}"),
