@@ -12,6 +12,7 @@ internal static class CommandTree
         CommonOptions common = new();
         RootCommand root = new("Which reductant takes the oxygen off an oxide charge, from which temperature, in which atmosphere, with what heat, and how sure that is.");
         common.AddTo(root);
+        root.Subcommands.Add(PlanCommand.Create(screen, common));
         root.Subcommands.Add(RankCommand.Create(screen, common));
         root.Subcommands.Add(AtmosphereCommand.Create(screen, common));
         root.Subcommands.Add(GasCommand.Create(screen, common));

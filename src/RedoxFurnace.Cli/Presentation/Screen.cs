@@ -27,7 +27,7 @@ internal sealed class Screen(TextWriter output, TextWriter error, int width)
                 output.Write('\n');
                 break;
             case OutputForm.Csv:
-                WriteCsv(answer.Tables[0]);
+                output.Write(answer.Tables.Count > 0 ? ToCsv(answer.Tables[0]) : "");
                 break;
             default:
                 WriteText(answer);
@@ -49,14 +49,9 @@ internal sealed class Screen(TextWriter output, TextWriter error, int width)
         return Encoding.UTF8.GetString(buffer.WrittenSpan);
     }
 
-    private void WriteCsv(AnswerTable table)
-    {
-        output.Write(string.Join(",", table.Columns.Select(column => column.Key)) + "\n");
-        foreach (IReadOnlyList<Cell> row in table.Rows)
-        {
-            output.Write(string.Join(",", row.Select(cell => Quoted(cell.Exact))) + "\n");
-        }
-    }
+    /// <summary>A table as CSV, keys as its heading.</summary>
+    public static string ToCsv(AnswerTable table)
+        => string.Concat(table.Rows.Select(row => row.Select(cell => Quoted(cell.Exact))).Prepend(table.Columns.Select(column => column.Key)).Select(line => string.Join(",", line) + "\n"));
 
     private static string Quoted(string text)
         => text.AsSpan().IndexOfAny(",\"\n") >= 0 ? "\"" + text.Replace("\"", "\"\"", StringComparison.Ordinal) + "\"" : text;

@@ -128,7 +128,16 @@ internal static class CampaignPlanning
 
         foreach (MetalInGas metal in facts.SoakGas.Take(1).SelectMany(point => point.Metals))
         {
-            yield return new ProductCheck($"{metal.Element.Symbol} surface", facts.Sheet.Parts!.KeepOxidised.Contains(metal.Element.Symbol) ? "stays oxidised" : "bright", $"{GasReckoning.Word(metal.Verdict)}{(metal.Oxide is null ? "" : " (" + metal.Oxide + ")")}", facts.Sheet.Parts.KeepOxidised.Contains(metal.Element.Symbol) ? metal.Verdict == BrightVerdict.Oxidises ? "meets" : "fails" : metal.Verdict == BrightVerdict.Bright ? "meets" : metal.Verdict == BrightVerdict.Oxidises ? "fails" : "borderline");
+            PartsSheet parts = facts.Sheet.Parts!;
+            string symbol = metal.Element.Symbol;
+            string found = GasReckoning.Word(metal.Verdict) + (metal.Oxide is null ? "" : $" (against {metal.Oxide})");
+            bool oxidises = metal.Verdict == BrightVerdict.Oxidises;
+            string verdict = metal.Verdict is BrightVerdict.Borderline or BrightVerdict.NotDecidable ? GasReckoning.Word(metal.Verdict) : oxidises ? "fails" : "meets";
+            yield return parts.KeepOxidised.Contains(symbol)
+                ? new ProductCheck(symbol + " surface", "stays oxidised", found, oxidises ? "meets" : "fails")
+                : parts.KeepBright.IsEmpty || parts.KeepBright.Contains(symbol)
+                    ? new ProductCheck(symbol + " surface", "bright", found, verdict)
+                    : new ProductCheck(symbol + " surface", "not asked", found, "told");
         }
 
         if (facts.SoakGas.FirstOrDefault()?.Steel is { Carbon: { } carbon } steel)
@@ -278,6 +287,13 @@ internal static class CampaignPlanning
         {
             string of = string.Join(",", alloy.Split(',').Select(part => part.Trim().Split('=')[0].Split(' ')[0]).Where(name => AtomicWeights.Has(name) && name is not ("C" or "N")).Distinct());
             yield return ("stability", [("of", of), ("range", range), ("window", window), ("title", sheet.Title + ": stability of the parts"), .. facts.SoakGas.IsEmpty ? Array.Empty<(string, string)>() : [("with", "H2"), ("gas-ratio", Exact(Math.Max(1e-6, facts.SoakGas[0].Answer.AsAnalysed is { } gas && double.IsFinite(gas.NaturalLogPressure(GasSpecies.H2) - gas.NaturalLogPressure(GasSpecies.H2O)) ? Math.Round(Math.Exp(gas.NaturalLogPressure(GasSpecies.H2) - gas.NaturalLogPressure(GasSpecies.H2O)), 2) : 100)))]]);
+        }
+
+        if (facts.Kind == CampaignKind.Parts && sheet.Parts?.Alloy is null && !facts.SoakGas.IsEmpty)
+        {
+            GasState gas = facts.SoakGas[0].Answer.AsAnalysed;
+            double ratio = gas.NaturalLogPressure(GasSpecies.CO) - gas.NaturalLogPressure(GasSpecies.CO2);
+            yield return ("stability", [("of", "Fe,Cr,Mn,Si"), ("range", range), ("window", window), ("title", sheet.Title + ": the gas against the metals of the steel"), .. double.IsFinite(ratio) ? [("with", "CO"), ("gas-ratio", Exact(Math.Exp(ratio)))] : Array.Empty<(string, string)>()]);
         }
 
         if (facts.Kind == CampaignKind.SolidReduction && facts.Ranking is not null)

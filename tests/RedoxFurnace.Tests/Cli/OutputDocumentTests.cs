@@ -18,7 +18,7 @@ public class OutputDocumentTests
         Assert.NotNull(section.Command);
         // OUT stands for a place to write to.
         using ScratchFolder scratch = new();
-        ProgramRun run = ProgramRun.Of(section.Command["redoxfurnace ".Length..].Replace("OUT", scratch["out"], StringComparison.Ordinal));
+        ProgramRun run = ProgramRun.Of(section.Command["redoxfurnace ".Length..].Replace("OUT", scratch["out"], StringComparison.Ordinal).Replace("charts/campaigns/", Path.Combine(Repository.Root, "charts", "campaigns") + "/", StringComparison.Ordinal));
         JsonElement answer = run.Json();
         Assert.Equal(shape, answer.GetProperty("schema").GetString());
         SortedSet<string> written = new(StringComparer.Ordinal);

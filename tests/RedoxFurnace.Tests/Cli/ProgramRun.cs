@@ -22,8 +22,8 @@ internal sealed record ProgramRun(int ExitCode, string Output, string Error)
 
     public JsonElement Json()
     {
-        Assert.Equal("", Error);
         Assert.Equal(0, ExitCode);
+        // Standard error may tell the stage at work; a refusal would not end with 0.
         using JsonDocument document = JsonDocument.Parse(Output);
         return document.RootElement.Clone();
     }
