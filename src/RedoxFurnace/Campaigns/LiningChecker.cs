@@ -13,8 +13,19 @@ internal sealed class LiningChecker(SubstanceDatabase database)
     /// <summary>Trade names of linings, with the oxides they stand for here; a mixture is judged by its weakest.</summary>
     private static readonly Dictionary<string, string[]> TradeNames = new(StringComparer.OrdinalIgnoreCase)
     {
-        ["alumina"] = ["Al2O3"], ["magnesia"] = ["MgO"], ["silica"] = ["SiO2"], ["zirconia"] = ["ZrO2"], ["lime"] = ["CaO"], ["yttria"] = ["Y2O3"], ["chromia"] = ["Cr2O3"],
-        ["mullite"] = ["SiO2", "Al2O3"], ["fireclay"] = ["SiO2", "Al2O3"], ["alumina-silica"] = ["SiO2", "Al2O3"], ["spinel"] = ["MgAl2O4"], ["graphite"] = ["C"], ["dolime"] = ["MgO", "CaO"],
+        ["alumina"] = ["Al2O3"],
+        ["magnesia"] = ["MgO"],
+        ["silica"] = ["SiO2"],
+        ["zirconia"] = ["ZrO2"],
+        ["lime"] = ["CaO"],
+        ["yttria"] = ["Y2O3"],
+        ["chromia"] = ["Cr2O3"],
+        ["mullite"] = ["SiO2", "Al2O3"],
+        ["fireclay"] = ["SiO2", "Al2O3"],
+        ["alumina-silica"] = ["SiO2", "Al2O3"],
+        ["spinel"] = ["MgAl2O4"],
+        ["graphite"] = ["C"],
+        ["dolime"] = ["MgO", "CaO"],
         ["silicon-carbide"] = ["SiC"],
     };
 
