@@ -16,14 +16,14 @@ public sealed class ChartSettings
     /// <summary>Every key a sheet may hold, with what it says.</summary>
     public static IReadOnlyList<(string Key, string Meaning)> Keys { get; } =
     [
-        ("kind", "stability (default), oxygen-pressure, van-t-hoff, margins"),
+        ("kind", "stability (default), oxygen-pressure, van-t-hoff, margins, gas-ratio"),
         ("title", "above the plot"),
         ("of", "metals and oxides, such as Cr,Fe,SiO2"),
         ("with", "reductants, such as C,H2,Al"),
         ("range", "temperatures from and to, such as 200C..1800C"),
         ("at", "one temperature, for margins"),
         ("pressure", "total pressure"),
-        ("pco", "pressures of CO over graphite, one line each, such as 1bar,1mbar"),
+        ("pco", "pressures of CO (gas-ratio chart: of CO and CO2) over graphite, one line each, such as 1bar,1mbar"),
         ("gas-ratio", "pH2/pH2O and pCO/pCO2, one line each, such as 10,100"),
         ("activity", "activities, such as Cr=0.2"),
         ("direct", "metal to one oxide instead of the couples of the ladder"),
@@ -37,6 +37,7 @@ public sealed class ChartSettings
         ("energy", "kJ or kcal"),
         ("inverse", "1/T along the horizontal axis"),
         ("ratios", "lines of equal gas ratio: CO/CO2, H2/H2O or both"),
+        ("axis", "gas-ratio chart: share (default) or log of the ratio"),
         ("equations", "reactions, parted by semicolons"),
         ("points", "measured points of a reaction: 900C 0.5; 1000C 0.8 (T and log10 K)"),
         ("charge", "what is charged, such as Cr2O3 1000kg, C 237kg"),

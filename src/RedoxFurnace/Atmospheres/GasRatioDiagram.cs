@@ -11,13 +11,14 @@ public sealed record GasRatioDiagram
 {
     private const double BesideInvariant = 0.005;
 
-    private GasRatioDiagram(string element, ImmutableArray<GasRatioBoundary> monoxide, ImmutableArray<GasRatioBoundary> hydrogen, ImmutableArray<GraphiteBoundary> graphite, ImmutableArray<LadderInvariant> invariants)
+    private GasRatioDiagram(string element, ImmutableArray<GasRatioBoundary> monoxide, ImmutableArray<GasRatioBoundary> hydrogen, ImmutableArray<GraphiteBoundary> graphite, ImmutableArray<LadderInvariant> invariants, ImmutableArray<Substance> substances)
     {
         Element = element;
         Monoxide = monoxide;
         Hydrogen = hydrogen;
         Graphite = graphite;
         Invariants = invariants;
+        Substances = substances;
     }
 
     /// <summary>The metal.</summary>
@@ -34,6 +35,9 @@ public sealed record GasRatioDiagram
 
     /// <summary>Temperatures at which the fields change.</summary>
     public ImmutableArray<LadderInvariant> Invariants { get; }
+
+    /// <summary>Every substance the boundaries rest on, in the order of their formulas.</summary>
+    public ImmutableArray<Substance> Substances { get; }
 
     /// <summary>Reckons the boundaries.</summary>
     /// <param name="element">Symbol of the metal.</param>
@@ -74,16 +78,24 @@ public sealed record GasRatioDiagram
             Boundaries(ladders, reactions.CarbonMonoxideOxidation),
             Boundaries(ladders, reactions.HydrogenOxidation),
             [.. graphitePressures.Select(pressure => new GraphiteBoundary(pressure, [.. grid.Select(kelvin => OverGraphite(kelvin, pressure, reactions))]))],
-            invariants);
+            invariants,
+            [.. ladders.SelectMany(ladder => ladder.Steps).SelectMany(step => step.Couple.Formation.Terms)
+                .Concat(reactions.CarbonMonoxideOxidation.Terms).Concat(reactions.HydrogenOxidation.Terms).Concat(reactions.GraphiteToMonoxide.Terms)
+                .Select(term => term.Substance).Distinct().OrderBy(substance => substance.Id, StringComparer.Ordinal)]);
     }
 
+    /// <summary>Boudouard: ln K = ln r + ln pCO and pCO = P r/(1 + r), so ln r moves by (1 + r)/(2 + r) of ln K.</summary>
     private static GasRatioPoint OverGraphite(double kelvin, Pressure pressure, GasReactions reactions)
     {
-        (_, double potential) = reactions.AboveGraphite(kelvin, pressure.NaturalLogBar);
-        return Point(kelvin, GasReactions.RatioOfPotential(reactions.CarbonMonoxideOxidation, kelvin, potential));
+        (double share, double potential) = reactions.AboveGraphite(kelvin, pressure.NaturalLogBar);
+        double ofConstant = Relative(reactions.GraphiteToMonoxide.Plus(1, reactions.CarbonMonoxideOxidation, -1), kelvin);
+        return Point(kelvin, GasReactions.RatioOfPotential(reactions.CarbonMonoxideOxidation, kelvin, potential), ofConstant / (2 - share));
     }
 
-    private static GasRatioPoint Point(double kelvin, double logRatio) => new(kelvin, 1 / (1 + Math.Exp(-logRatio)), logRatio);
+    private static GasRatioPoint Point(double kelvin, double logRatio, double uncertainty) => new(kelvin, 1 / (1 + Math.Exp(-logRatio)), logRatio, uncertainty);
+
+    /// <summary>Expanded uncertainty of ln of a gas ratio, from a reaction of which one mole O2 moves two moles of gas.</summary>
+    private static double Relative(Reaction reaction, double kelvin) => ReactionUncertainty.OfGibbs(reaction, kelvin, null) / (2 * PhysicalConstants.GasConstant * kelvin);
 
     /// <summary>One boundary for each run of neighbouring temperatures at which a couple stands on the ladder.</summary>
     private static ImmutableArray<GasRatioBoundary> Boundaries(OxideLadder[] ladders, Reaction oxidation)
@@ -106,7 +118,7 @@ public sealed record GasRatioDiagram
                     running[name] = run = (step, []);
                 }
 
-                run.Points.Add(Point(ladder.Kelvin, GasReactions.RatioOfPotential(oxidation, ladder.Kelvin, step.OxygenPotential!.Value)));
+                run.Points.Add(Point(ladder.Kelvin, GasReactions.RatioOfPotential(oxidation, ladder.Kelvin, step.OxygenPotential!.Value), Relative(step.Couple.Formation.Plus(1, oxidation, -1), ladder.Kelvin)));
             }
         }
 
