@@ -39,7 +39,7 @@ public static class GasRatioChart
         (double low, double high) = Extent(series, options);
         (double cold, double hot) = (first.SelectMany(line => line.Points).Min(point => point.Kelvin), first.SelectMany(line => line.Points).Max(point => point.Kelvin));
         ImmutableArray<PlanCrossing> crossings = options.Gases.Contains("CO") ? Crossings(diagram, options) : [];
-        ImmutableArray<FieldPlan> fields = Fields(first, series, (cold, hot), (low, high), options);
+        ImmutableArray<FieldPlan> fields = Fields(diagram, first, series, (cold, hot), (low, high), options);
         return new ChartPlan
         {
             Title = RichText.OfChemistry(options.Title ?? $"{diagram.Element} and its oxides in {string.Join(" and ", options.Gases.Select(Mixture))}"),
@@ -71,6 +71,8 @@ public static class GasRatioChart
         _ => "log_{10} p(H_{2})/p(H_{2}O)",
     })) + (options.Logarithmic ? "" : ", %"));
 
+    private static bool IsAtEdge(double percent) => percent is < EdgePercent or > 100 - EdgePercent;
+
     private static double Height(double logRatio, bool logarithmic) => logarithmic ? logRatio / Math.Log(10) : 100 / (1 + Math.Exp(-logRatio));
 
     private static (double Low, double High) Extent(ImmutableArray<SeriesPlan> series, GasRatioOptions options)
@@ -87,7 +89,7 @@ public static class GasRatioChart
     private static SeriesPlan Line(GasRatioBoundary boundary, string gas, int colour, bool second, bool both, GasRatioDiagram diagram, GasRatioOptions options)
         => Series(
             both ? $"{boundary.Couple} in {Mixture(gas)}" : boundary.Couple,
-            RichText.OfChemistry(both ? $"{boundary.Couple}, {gas}" : boundary.Couple),
+            RichText.OfChemistry(!options.Logarithmic && boundary.Points.All(point => IsAtEdge(100 * point.Share)) ? "" : both ? $"{boundary.Couple}, {gas}" : boundary.Couple),
             boundary.Points,
             new Stroke(ChartInks.Couples[colour % ChartInks.Couples.Length], 0.42, second ? SecondGasDashes : []),
             options) with
@@ -122,8 +124,11 @@ public static class GasRatioChart
         };
     }
 
-    /// <summary>Each run of temperatures at which a solid stands between two neighbouring boundaries, or between one and the edge.</summary>
-    private static ImmutableArray<FieldPlan> Fields(ImmutableArray<GasRatioBoundary> boundaries, ImmutableArray<SeriesPlan> series, (double Cold, double Hot) x, (double Low, double High) y, GasRatioOptions options)
+    /// <summary>
+    /// Each run of temperatures at which a solid stands between two neighbouring boundaries, or between one and the edge. Open to the edge are
+    /// the metal alone, and the highest oxide as long as no still higher one is missing for want of data.
+    /// </summary>
+    private static ImmutableArray<FieldPlan> Fields(GasRatioDiagram diagram, ImmutableArray<GasRatioBoundary> boundaries, ImmutableArray<SeriesPlan> series, (double Cold, double Hot) x, (double Low, double High) y, GasRatioOptions options)
     {
         Dictionary<string, List<(double Kelvin, double Lower, double Upper)>> running = [];
         List<(string Name, List<(double Kelvin, double Lower, double Upper)> Edge)> finished = [];
@@ -133,7 +138,17 @@ public static class GasRatioChart
             .OrderBy(group => group.Key))
         {
             (string Reduced, string Oxidised, double Height)[] steps = [.. at.OrderByDescending(step => step.Height)];
-            Dictionary<string, (double Lower, double Upper)> here = new() { [steps[0].Reduced] = (steps[0].Height, y.High), [steps[^1].Oxidised] = (y.Low, steps[^1].Height) };
+            Dictionary<string, (double Lower, double Upper)> here = [];
+            if (steps[0].Reduced == diagram.Element)
+            {
+                here[diagram.Element] = (steps[0].Height, y.High);
+            }
+
+            if (!DataEnds(diagram).Any(end => end.JoinsAbove ? at.Key < end.Kelvin : at.Key > end.Kelvin))
+            {
+                here[steps[^1].Oxidised] = (y.Low, steps[^1].Height);
+            }
+
             foreach ((int i, (string _, string oxidised, double height)) in steps[..^1].Index())
             {
                 if (oxidised == steps[i + 1].Reduced)
@@ -175,6 +190,8 @@ public static class GasRatioChart
             }),
         ];
     }
+
+    private static IEnumerable<LadderInvariant> DataEnds(GasRatioDiagram diagram) => diagram.Invariants.Where(invariant => invariant.Change == LadderChange.DataEnd && invariant.Phase != diagram.Element);
 
     /// <summary>Where in a field a name stands clearest of every line.</summary>
     private static (DataPoint Place, bool IsFree) Roomiest(List<(double Kelvin, double Lower, double Upper)> field, ImmutableArray<SeriesPlan> series, (double Cold, double Hot) x, (double Low, double High) y)
@@ -232,7 +249,7 @@ public static class GasRatioChart
         double[] uncertainty = [.. options.Gases.SelectMany(gas => Of(diagram, gas)).SelectMany(line => line.Points).Select(point => 100 * point.ExpandedUncertainty)];
         yield return $"Basis: ratio of the two gases, whatever else is in the gas and at any total pressure; {activities}. A line parts the solid that stands above it from the one below."
             + (options.Gases.Length > 1 ? $" Solid lines and fields: {Mixture(options.Gases[0])}; dashed lines: {Mixture(options.Gases[1])}." : "");
-        yield return $"Uncertainty of a gas ratio: expanded, k = 2, {Printed.Brief(uncertainty.Min())} to {Printed.Brief(uncertainty.Max())} %{(options.Bands ? ", shown as bands" : "")}."
+        yield return $"Uncertainty of a gas ratio: expanded, k = 2, {Printed.Fixed(uncertainty.Min(), 0)} to {Printed.Fixed(uncertainty.Max(), 0)} %{(options.Bands ? ", shown as bands" : "")}."
             + (options.Gases.Contains("CO") && !diagram.Graphite.IsEmpty ? " Graphite line: at p(CO) + p(CO2) as written; above it CO drops soot." : "");
         foreach (string words in TemperatureAxis.WindowWords(options))
         {
@@ -240,10 +257,16 @@ public static class GasRatioChart
         }
 
         yield return "Equilibrium, not rate: carbon comes out and oxides react at their own pace. Carbides are left out.";
-        string[] hidden = options.Logarithmic ? [] : [.. series.Where(line => line.Points.All(point => point.Y is < EdgePercent or > 100 - EdgePercent)).Select(line => line.Name).Distinct()];
+        string[] hidden = options.Logarithmic ? [] : [.. series.Where(line => line.Points.All(point => IsAtEdge(point.Y))).Select(line => line.Name).Distinct()];
         if (hidden.Length > 0)
         {
-            yield return $"Within 1 % of the edge, so hardly seen: {string.Join(", ", hidden)}; a logarithmic axis shows them.";
+            yield return $"Within 1 % of the edge, so hardly seen and not named there: {string.Join(", ", hidden)}; a logarithmic axis shows them.";
+        }
+
+        LadderInvariant[] ends = [.. DataEnds(diagram)];
+        if (ends.Length > 0)
+        {
+            yield return $"Data end ({string.Join(", ", ends.Select(end => $"{end.Phase} {TemperatureAxis.Text(end.Kelvin, options.Unit)}"))}): beyond, the field at the oxidising edge is left white.";
         }
 
         yield return "Sources: " + string.Join("; ", sources) + ".";
