@@ -5,6 +5,7 @@ using RedoxFurnace.Benchmarks;
 (string Name, Func<IEnumerable<BenchmarkRow>> Run)[] topics =
 [
     ("data", DataBenchmarks.Run),
+    ("gas", GasBenchmarks.Run),
 ];
 
 Console.WriteLine("| what | one call | against | baseline | ratio | goal |");

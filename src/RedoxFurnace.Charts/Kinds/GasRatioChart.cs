@@ -246,17 +246,17 @@ public static class GasRatioChart
 
     private static IEnumerable<string> Caption(GasRatioDiagram diagram, string activities, ImmutableArray<SeriesPlan> series, GasRatioOptions options, ImmutableArray<string> sources, string databaseHash)
     {
-        double[] uncertainty = [.. options.Gases.SelectMany(gas => Of(diagram, gas)).SelectMany(line => line.Points).Select(point => 100 * point.ExpandedUncertainty)];
+        double[] uncertainty = [.. options.Gases.SelectMany(gas => Of(diagram, gas)).SelectMany(line => line.Points).Select(point => Math.Exp(point.ExpandedUncertainty))];
         yield return $"Basis: ratio of the two gases, whatever else is in the gas and at any total pressure; {activities}. A line parts the solid that stands above it from the one below."
             + (options.Gases.Length > 1 ? $" Solid lines and fields: {Mixture(options.Gases[0])}; dashed lines: {Mixture(options.Gases[1])}." : "");
-        yield return $"Uncertainty of a gas ratio: expanded, k = 2, {Printed.Fixed(uncertainty.Min(), 0)} to {Printed.Fixed(uncertainty.Max(), 0)} %{(options.Bands ? ", shown as bands" : "")}."
+        yield return $"Uncertainty of a gas ratio: expanded, k = 2, a factor {Printed.Fixed(uncertainty.Min(), 2)} to {Printed.Fixed(uncertainty.Max(), 2)}{(options.Bands ? ", shown as bands" : "")}."
             + (options.Gases.Contains("CO") && !diagram.Graphite.IsEmpty ? " Graphite line: at p(CO) + p(CO2) as written; above it CO drops soot." : "");
         foreach (string words in TemperatureAxis.WindowWords(options))
         {
             yield return words;
         }
 
-        yield return "Equilibrium, not rate: carbon comes out and oxides react at their own pace. Carbides are left out.";
+        yield return "Equilibrium, not rate: carbon comes out and oxides react at their own pace. Carbides are left out: a metal that forms one takes carbon before it is bare.";
         string[] hidden = options.Logarithmic ? [] : [.. series.Where(line => line.Points.All(point => IsAtEdge(point.Y))).Select(line => line.Name).Distinct()];
         if (hidden.Length > 0)
         {
