@@ -2,14 +2,14 @@ using RedoxFurnace.Substances;
 
 namespace RedoxFurnace.Oxidation;
 
-/// <summary>Propagates the uncertainty of substances through a reaction: var(dG) = sum (n u(H))^2 + T^2 sum (n u(S))^2, with the covariance of assessed enthalpies, and with one independent term for each reaction line.</summary>
+/// <summary>Propagates the uncertainty of substances through a reaction: var(dG) = sum (n u(H))^2 + T^2 sum (n u(S))^2, with the covariance of what an assessment weighed together, and with one independent term for each reaction line.</summary>
 /// <remarks>THEORY.md, section 5.</remarks>
 public static class ReactionUncertainty
 {
     /// <summary>Expanded uncertainty (k = 2) of the Gibbs energy of reaction.</summary>
     /// <param name="reaction">The reaction.</param>
     /// <param name="kelvin">Temperature, K.</param>
-    /// <param name="covariance">Covariance of assessed enthalpies, or null.</param>
+    /// <param name="covariance">Covariance of assessed enthalpies and entropies, or null.</param>
     /// <returns>J for the reaction as written.</returns>
     public static double OfGibbs(Reaction reaction, double kelvin, EnthalpyCovariance? covariance)
         => 2 * Math.Sqrt(Variance(Expand(reaction, kelvin), kelvin, covariance, substance => substance.Uncertainty.EnthalpyJoules));
@@ -82,7 +82,7 @@ public static class ReactionUncertainty
             double enthalpy = number * expandedEnthalpy(substance) / 2;
             double entropy = number * substance.Uncertainty.EntropyJoulesPerKelvin / 2 * kelvin;
             bool known = covariance is not null && covariance.Has(substance.Id);
-            sum += (known ? 0 : enthalpy * enthalpy) + (entropy * entropy);
+            sum += known ? 0 : (enthalpy * enthalpy) + (entropy * entropy);
         }
 
         foreach ((ReactionLine line, double number) in parts.Lines)
@@ -91,6 +91,6 @@ public static class ReactionUncertainty
             sum += own * own;
         }
 
-        return sum + (covariance?.Variance(parts.Substances) ?? 0);
+        return sum + (covariance?.Variance(parts.Substances, kelvin) ?? 0);
     }
 }
