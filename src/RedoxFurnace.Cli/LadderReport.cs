@@ -13,7 +13,8 @@ internal sealed record LadderReport(
     ImmutableArray<string> Notes,
     ImmutableArray<string> Assumptions,
     ImmutableArray<string> Sources,
-    (double Low, double High) DataRange)
+    (double Low, double High) DataRange,
+    EnthalpyCovariance? Covariance)
 {
     public static LadderReport Of(string metal, TemperatureSeries series, Activities activities, Pressure vapour, SubstanceDatabase database)
     {
@@ -34,10 +35,11 @@ internal sealed record LadderReport(
             [.. NotesOf(ladders)],
             [$"metal vapour competes at {vapour}", activities.Describe(), "pO2 is that of coexistence of two neighbours; uncertainties are expanded (k = 2)", "pure phases of fixed composition, wustite as one phase of three members; equilibrium, not rate"],
             Citations.Of(system.Elements.Concat(system.Oxides).Append(system.Oxygen), database),
-            (system.Elements[0].LowestKelvin, system.Elements[0].HighestKelvin));
+            (system.Elements[0].LowestKelvin, system.Elements[0].HighestKelvin),
+            database.Covariance);
     }
 
-    public double? Expanded(LadderStep step, double kelvin) => step.Gap is null ? ReactionUncertainty.OfGibbs(step.Couple.Formation, kelvin, null) : null;
+    public double? Expanded(LadderStep step, double kelvin) => step.Gap is null ? ReactionUncertainty.OfGibbs(step.Couple.Formation, kelvin, Covariance) : null;
 
     private static IEnumerable<string> NotesOf(ImmutableArray<OxideLadder> ladders)
     {

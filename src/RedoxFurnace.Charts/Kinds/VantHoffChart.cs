@@ -3,6 +3,7 @@ using RedoxFurnace.Charts.Plans;
 using RedoxFurnace.Charts.Scenes;
 using RedoxFurnace.Oxidation;
 using RedoxFurnace.Quantities;
+using RedoxFurnace.Substances;
 
 namespace RedoxFurnace.Charts.Kinds;
 
@@ -19,6 +20,7 @@ public static class VantHoffChart
     /// <param name="options">Choices.</param>
     /// <param name="sources">Citations in full.</param>
     /// <param name="databaseHash">SHA-256 of the database.</param>
+    /// <param name="covariance">Of the database, or null.</param>
     /// <returns>The plan.</returns>
     /// <exception cref="NoAnswerException">No reaction has data in the range.</exception>
     public static ChartPlan Plan(
@@ -27,10 +29,11 @@ public static class VantHoffChart
         (Temperature Low, Temperature High) range,
         ChartOptions options,
         ImmutableArray<string> sources,
-        string databaseHash)
+        string databaseHash,
+        EnthalpyCovariance? covariance)
     {
         (double low, double high) = (range.Low.Kelvin, range.High.Kelvin);
-        (SeriesPlan Series, string Words)[] lines = [.. reactions.Select((item, i) => Line(item.Text, item.Reaction, low, high, i)).OfType<(SeriesPlan, string)>()];
+        (SeriesPlan Series, string Words)[] lines = [.. reactions.Select((item, i) => Line(item.Text, item.Reaction, low, high, i, covariance)).OfType<(SeriesPlan, string)>()];
         if (lines.Length == 0)
         {
             throw new NoAnswerException($"no reaction has data between {range.Low} and {range.High}; choose another range");
@@ -67,7 +70,7 @@ public static class VantHoffChart
     }
 
     /// <summary>One reaction where all its partners have data, with the enthalpy of its mean slope in words.</summary>
-    private static (SeriesPlan Series, string Words)? Line(string text, Reaction reaction, double low, double high, int index)
+    private static (SeriesPlan Series, string Words)? Line(string text, Reaction reaction, double low, double high, int index, EnthalpyCovariance? covariance)
     {
         MeasuredPoint[] at = [.. Enumerable.Range(0, Samples + 1).Select(i => low + ((high - low) * i / Samples)).Where(reaction.HasData)
             .Select(kelvin => new MeasuredPoint(kelvin, -reaction.StandardGibbs(kelvin) / (PhysicalConstants.GasConstant * kelvin)))];
@@ -76,7 +79,7 @@ public static class VantHoffChart
             return null;
         }
 
-        double[] uncertainty = [.. at.Reverse().Select(point => ReactionUncertainty.OfGibbs(reaction, point.Kelvin, null) / (PhysicalConstants.GasConstant * point.Kelvin))];
+        double[] uncertainty = [.. at.Reverse().Select(point => ReactionUncertainty.OfGibbs(reaction, point.Kelvin, covariance) / (PhysicalConstants.GasConstant * point.Kelvin))];
         DataPoint[] points = [.. at.Reverse().Select(point => new DataPoint(1000 / point.Kelvin, point.NaturalLog))];
         SeriesPlan series = new()
         {

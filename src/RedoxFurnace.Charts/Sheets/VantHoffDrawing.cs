@@ -36,7 +36,7 @@ internal static class VantHoffDrawing
         });
         ChartOptions options = ChartDrawing.Common(new ChartOptions(), settings, hazards, version);
         return new DrawnChart(
-            [ChartLayout.Lay(VantHoffChart.Plan(reactions, points, range, options, sources, database.Hash))],
+            [ChartLayout.Lay(VantHoffChart.Plan(reactions, points, range, options, sources, database.Hash, database.Covariance))],
             $"ln K against 1/T of {string.Join("; ", reactions.Select(item => item.Text))}",
             [],
             hazards,

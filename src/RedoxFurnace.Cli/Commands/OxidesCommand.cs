@@ -15,6 +15,7 @@ internal static class OxidesCommand
         command.Subcommands.Add(CreateList(screen, common));
         command.Subcommands.Add(CreateShow(screen, common));
         command.Subcommands.Add(OxidesCheckCommand.Create(screen, common));
+        command.Subcommands.Add(OxidesAssessCommand.Create(screen, common));
         return command;
     }
 

@@ -41,7 +41,7 @@ public static class AtmosphereWindow
 
                 foreach (LadderStep step in descent.Steps)
                 {
-                    rows.Add(Row(step, ReferenceEquals(step, descent.Hardest), at.Kelvin, request, gases));
+                    rows.Add(Row(step, ReferenceEquals(step, descent.Hardest), at.Kelvin, request, gases, database.Covariance));
                     used.UnionWith(step.Couple.Formation.Terms.Select(term => term.Substance));
                     notes.AddRange(step.Gap is { } gap ? [gap] : []);
                 }
@@ -83,7 +83,7 @@ public static class AtmosphereWindow
             : metals.Contains(wanted) ? wanted : throw new RequestException($"--metal '{wanted}' is not in {oxide.Id}; it holds {string.Join(" and ", metals)}");
     }
 
-    private static AtmosphereRow Row(LadderStep step, bool hardest, double kelvin, AtmosphereRequest request, GasReactions gases)
+    private static AtmosphereRow Row(LadderStep step, bool hardest, double kelvin, AtmosphereRequest request, GasReactions gases, EnthalpyCovariance? covariance)
     {
         Reaction formation = step.Couple.Formation;
         if (step.OxygenPotential is not { } potential)
@@ -92,8 +92,8 @@ public static class AtmosphereWindow
         }
 
         double rt = PhysicalConstants.GasConstant * kelvin;
-        double expanded = ReactionUncertainty.OfGibbs(formation, kelvin, null);
-        double expandedWithHydrogen = ReactionUncertainty.OfGibbs(formation.Times(-1).Plus(1, gases.HydrogenOxidation, 1), kelvin, null);
+        double expanded = ReactionUncertainty.OfGibbs(formation, kelvin, covariance);
+        double expandedWithHydrogen = ReactionUncertainty.OfGibbs(formation.Times(-1).Plus(1, gases.HydrogenOxidation, 1), kelvin, covariance);
         double logHydrogen = GasReactions.RatioOfPotential(gases.HydrogenOxidation, kelvin, potential);
         double logMonoxide = GasReactions.RatioOfPotential(gases.CarbonMonoxideOxidation, kelvin, potential);
         double logWater = Math.Log(request.HydrogenShare) + request.Total.NaturalLogBar - logHydrogen;

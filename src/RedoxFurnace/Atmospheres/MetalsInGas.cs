@@ -22,13 +22,12 @@ public sealed class MetalsInGas
 
     /// <summary>Takes what it needs from a database.</summary>
     /// <param name="database">Data.</param>
-    /// <param name="covariance">Covariance of assessed enthalpies, or null.</param>
-    public MetalsInGas(SubstanceDatabase database, EnthalpyCovariance? covariance = null)
+    public MetalsInGas(SubstanceDatabase database)
     {
         _database = database;
         _reactions = new GasReactions(database);
         _equilibrium = new GasEquilibrium(database);
-        _covariance = covariance;
+        _covariance = database.Covariance;
         _nitrogen = database.Get("N2");
     }
 

@@ -56,7 +56,7 @@ public static class ReductantRanking
                 hardest.Couple.Formation.Text,
                 hardest.StandardGibbs,
                 hardest.OxygenPotential!.Value,
-                ReactionUncertainty.OfGibbs(hardest.Couple.Formation, kelvin, null)),
+                ReactionUncertainty.OfGibbs(hardest.Couple.Formation, kelvin, database.Covariance)),
             Rows = rows,
             Headline = RankWords.Headline(oxide.Id, metal, request.At, rows),
             Assumptions = RankWords.Assumptions(request.Conditions, descent, request.At),

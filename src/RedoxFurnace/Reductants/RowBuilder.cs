@@ -69,7 +69,7 @@ internal sealed class RowBuilder(OxidePath charge, RankConditions conditions, Su
     {
         Reaction reaction = point.Reaction;
         Use(reaction);
-        double expanded = point.ExpandedUncertainty(null);
+        double expanded = point.ExpandedUncertainty(database.Covariance);
         Verdict verdict = VerdictOf(point.Margin, expanded);
         Crossovers crossovers = Crossovers.Find(pair.TryMargin, Math.Min(pair.LowestKelvin, kelvin), Math.Max(pair.HighestKelvin, kelvin), pair.Charge.Breaks.Concat(pair.Reductant.Breaks));
         ReductionBalance balance = ReductionBalance.Of(pair, point);
@@ -123,7 +123,7 @@ internal sealed class RowBuilder(OxidePath charge, RankConditions conditions, Su
         }
 
         double margin = potential - own.OxygenPotential;
-        double expanded = ReactionUncertainty.OfGibbs(reaction, point.Kelvin, null);
+        double expanded = ReactionUncertainty.OfGibbs(reaction, point.Kelvin, database.Covariance);
         return new RankedStep(reaction.Text, margin, expanded, VerdictOf(margin, expanded), null);
     }
 

@@ -159,7 +159,7 @@ internal sealed class SideProductFinder(SubstanceDatabase database, GasReactions
         {
             if (FormationPerAtom(formation, metal, kelvin) is { } gibbs)
             {
-                found.Add((compound, gibbs, ReactionUncertainty.OfGibbs(formation, kelvin, null)));
+                found.Add((compound, gibbs, ReactionUncertainty.OfGibbs(formation, kelvin, database.Covariance)));
             }
         }
 

@@ -89,7 +89,7 @@ public static class StabilityLines
                 here.Add(id);
                 if (!open.TryGetValue(id, out Builder? line))
                 {
-                    line = new Builder(id);
+                    line = new Builder(id, database.Covariance);
                     open.Add(id, line);
                     built.Add(line);
                 }
@@ -145,7 +145,7 @@ public static class StabilityLines
         OxidationCouple Couple(Substance reduced) => new(new Assemblage([(reduced, 1)]), new Assemblage([(oxide, 1 / perMetal)]), system.Oxygen);
         OxidationCouple condensed = Couple(system.Elements[0]);
         OxidationCouple? vapour = system.Vapours[0] is { } gas ? Couple(gas) : null;
-        Builder line = new(Plain(condensed.Name));
+        Builder line = new(Plain(condensed.Name), database.Covariance);
         foreach (double kelvin in Grid(request.Low.Kelvin, request.High.Kelvin, oxide.Breaks.Concat(system.Elements[0].Breaks)))
         {
             double? asLiquid = condensed.Formation.HasData(kelvin) ? condensed.OxygenPotential(kelvin, request.Activities) : null;
@@ -181,7 +181,7 @@ public static class StabilityLines
         foreach ((RankConditions conditions, string suffix) in variants)
         {
             ReductantModel model = ReductantModel.Of(info, database, gases, conditions, request.Activities);
-            Builder line = new(info.Id + suffix);
+            Builder line = new(info.Id + suffix, database.Covariance);
             foreach (double kelvin in Grid(request.Low.Kelvin, request.High.Kelvin, model.Breaks))
             {
                 if (TryStep(model, kelvin) is { } step)
@@ -250,7 +250,7 @@ public static class StabilityLines
     }
 
     /// <summary>Gathers the points of one line and finds its marks.</summary>
-    private sealed class Builder(string id)
+    private sealed class Builder(string id, EnthalpyCovariance? covariance)
     {
         private readonly List<(double Kelvin, double Potential, Reaction Reaction)> _points = [];
 
@@ -264,7 +264,7 @@ public static class StabilityLines
 
         public StabilityLine Build(string element, double low, double high, StabilityRequest request, ImmutableArray<LadderInvariant> changes)
         {
-            ImmutableArray<StabilityPoint> points = [.. _points.Select(point => new StabilityPoint(point.Kelvin, point.Potential, ReactionUncertainty.OfGibbs(point.Reaction, point.Kelvin, null)))];
+            ImmutableArray<StabilityPoint> points = [.. _points.Select(point => new StabilityPoint(point.Kelvin, point.Potential, ReactionUncertainty.OfGibbs(point.Reaction, point.Kelvin, covariance)))];
             ImmutableArray<Substance> substances = [.. _points.SelectMany(point => point.Reaction.Terms.Select(term => term.Substance)).Distinct()];
             StabilityLine bare = new(id, id, element, false, _points[_points.Count / 2].Reaction.Text, points, [], substances);
             return bare with { Marks = [.. Changes(bare, substances).Concat(Boiling(bare)).Concat(Ends(bare, low, high, request, changes)).OrderBy(mark => mark.Kelvin)] };

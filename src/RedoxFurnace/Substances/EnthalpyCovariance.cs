@@ -1,4 +1,6 @@
 using System.Collections.Immutable;
+using System.Globalization;
+using System.Text;
 
 namespace RedoxFurnace.Substances;
 
@@ -23,6 +25,56 @@ public sealed class EnthalpyCovariance
 
     /// <summary>Formulas in the order of the matrix.</summary>
     public ImmutableArray<string> Substances { get; }
+
+    /// <summary>Reads <c>covariance.yaml</c>.</summary>
+    /// <param name="root">The document.</param>
+    /// <returns>The covariance.</returns>
+    /// <exception cref="DocumentException">Rows of another length than the substances ask for, or a variance below 0.</exception>
+    public static EnthalpyCovariance Read(DocumentNode root)
+    {
+        root.AllowOnly("substances", "covariance");
+        ImmutableArray<string> substances = [.. root.Required("substances").Items.Select(node => node.Text)];
+        DocumentNode rows = root.Required("covariance");
+        int size = 2 * substances.Length;
+        if (rows.Items.Count != size)
+        {
+            throw DocumentException.WrongKind(rows.At, FormattableString.Invariant($"{size} rows, one for each enthalpy and then each entropy"), FormattableString.Invariant($"{rows.Items.Count}"));
+        }
+
+        double[,] covariance = new double[size, size];
+        for (int i = 0; i < size; i++)
+        {
+            double[] row = rows.Items[i].Numbers(i + 1);
+            if (row[i] < 0)
+            {
+                throw DocumentException.BadValue(rows.Items[i].At, "variance", rows.Items[i].Items[i].Text, "a variance is not below 0");
+            }
+
+            for (int j = 0; j <= i; j++)
+            {
+                covariance[i, j] = covariance[j, i] = row[j];
+            }
+        }
+
+        return new EnthalpyCovariance(substances, covariance);
+    }
+
+    /// <summary>The text of <c>covariance.yaml</c>; nine digits, so that the matrix stays positive and every machine writes the same.</summary>
+    /// <returns>YAML.</returns>
+    public string Write()
+    {
+        StringBuilder text = new();
+        text.Append("# Generated: do not edit. Rebuild with  redoxfurnace oxides assess --to oxides/covariance.yaml --force\n");
+        text.Append("# Covariance (k = 1) of what the measured couples and the calorimetric values say together. Rows 1 to n are the enthalpies at 298.15 K,\n");
+        text.Append("# J/mol, rows n + 1 to 2n the entropies, J/(mol K), each in the order of the substances; a row ends at its own variance.\n");
+        text.Append("substances: [").AppendJoin(", ", Substances).Append("]\ncovariance:\n");
+        for (int i = 0; i < 2 * _count; i++)
+        {
+            text.Append("  - [").AppendJoin(", ", Enumerable.Range(0, i + 1).Select(j => Short(_covariance[i, j]))).Append("]\n");
+        }
+
+        return text.ToString();
+    }
 
     /// <summary>Whether a substance is in the matrix.</summary>
     /// <param name="id">Formula.</param>
@@ -94,6 +146,9 @@ public sealed class EnthalpyCovariance
 
         return Math.Max(0, sum);
     }
+
+    /// <summary>Correlations too small to be told from rounding are written as 0.</summary>
+    private static string Short(double value) => Math.Abs(value) < 1e-7 ? "0" : value.ToString("G9", CultureInfo.InvariantCulture);
 
     private double OfGibbs(int i, int j, double kelvin)
         => _covariance[i, j] - (kelvin * (_covariance[i, j + _count] + _covariance[i + _count, j])) + (kelvin * kelvin * _covariance[i + _count, j + _count]);

@@ -14,6 +14,7 @@ public sealed class SubstanceDatabase
     private const string Compounds = "compounds.yaml";
     private const string SourcesFile = "sources.yaml";
     private const string DefaultsFile = "defaults.yaml";
+    private const string CovarianceFile = "covariance.yaml";
     private const string ResourcePrefix = "oxides/";
 
     private static readonly ImmutableHashSet<string> OtherFiles =
@@ -30,6 +31,7 @@ public sealed class SubstanceDatabase
     private readonly Dictionary<SubstanceClass, ClassDefault> _defaults = [];
     private readonly Dictionary<string, Citation> _sources = new(StringComparer.Ordinal);
     private readonly Lazy<string> _hash;
+    private readonly Lazy<EnthalpyCovariance?> _covariance;
     private bool _allRead;
 
     private SubstanceDatabase(ImmutableArray<DatabaseFile> overlayFiles)
@@ -40,6 +42,7 @@ public sealed class SubstanceDatabase
             .Where(name => name.StartsWith(ResourcePrefix, StringComparison.Ordinal))
             .ToImmutableDictionary(name => name[ResourcePrefix.Length..], name => (Func<string>)(() => ReadResource(assembly, name)), StringComparer.Ordinal);
         _hash = new Lazy<string>(ComputeHash);
+        _covariance = new Lazy<EnthalpyCovariance?>(ReadCovariance);
         ReadDefaults(Document(DefaultsFile));
         ReadSources(Document(SourcesFile));
         foreach (DatabaseFile file in overlayFiles)
@@ -64,6 +67,9 @@ public sealed class SubstanceDatabase
 
     /// <summary>SHA-256 over the names and texts of all files, overlay included, as 64 hexadecimal digits: two results with one hash rest on the same data.</summary>
     public string Hash => _hash.Value;
+
+    /// <summary>Covariance of the entries an assessment weighed together, or null. A user's own entry is independent of the others and counts with its own uncertainty.</summary>
+    public EnthalpyCovariance? Covariance => _covariance.Value;
 
     /// <summary>Whether a user's own entries are laid over the built-in ones.</summary>
     public bool HasOverlay => !_overlayFiles.IsEmpty;
@@ -343,6 +349,18 @@ public sealed class SubstanceDatabase
                 throw new DocumentException(node.At, $"the source key '{citation.Key}' stands twice; keep one");
             }
         }
+    }
+
+    private EnthalpyCovariance? ReadCovariance()
+    {
+        if (!_bundledFiles.TryGetValue(CovarianceFile, out Func<string>? text))
+        {
+            return null;
+        }
+
+        EnthalpyCovariance whole = EnthalpyCovariance.Read(DocumentNode.Parse(text(), ResourcePrefix + CovarianceFile));
+        HashSet<string> own = [.. whole.Substances.Where(id => Get(id).IsFromOverlay)];
+        return own.Count == 0 ? whole : whole.Without(own);
     }
 
     private string ComputeHash()
