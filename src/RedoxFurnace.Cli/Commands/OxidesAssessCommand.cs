@@ -55,6 +55,7 @@ internal static class OxidesAssessCommand
             "an equation counts as two observations, level and slope; a point as one; published enthalpies as one each",
             "differences are calculated less measured; pull is measured less calculated over half the stated error, mean over the temperatures",
             "metals and gases stay as they are",
+            FormattableString.Invariant($"sources of one couple differ beyond their errors by {result.BetweenSourcesJoules / 1000:0.00} kJ/mol O2 (k = 1, from the measurements kept out); the covariance adds it to every measurement"),
         ];
         string[] sources = [.. result.Measurements.Select(item => item.Measurement).Select(measurement => measurement.Source + (measurement.Provenance == "memory" ? " [recalled]" : string.Empty)).Distinct()];
         return new Answer
@@ -142,6 +143,7 @@ internal static class OxidesAssessCommand
         writer.WriteNumber("couple_observations", result.CoupleObservations);
         writer.WriteNumber("prior_observations", result.PriorObservations);
         writer.WriteNumber("free_values", result.FreeValues);
+        writer.Number("between_sources_kJ_per_mol_O2", result.BetweenSourcesJoules / 1000);
         writer.WriteStartArray("quantities");
         foreach (AssessedQuantity quantity in result.Quantities)
         {

@@ -11,6 +11,7 @@ namespace RedoxFurnace.Assessments;
 /// <param name="CoupleObservations">An equation counts as two.</param>
 /// <param name="PriorObservations">Calorimetric values.</param>
 /// <param name="FreeValues">Adjusted quantities.</param>
+/// <param name="BetweenSourcesJoules">How far sources of one couple differ beyond their errors, k = 1, J/mol O2, from the measurements kept out.</param>
 /// <param name="Covariance">Of the assessed enthalpies and entropies (THEORY.md, section 11).</param>
 public sealed record AssessmentResult(
     ImmutableArray<AssessedQuantity> Quantities,
@@ -20,6 +21,7 @@ public sealed record AssessmentResult(
     int CoupleObservations,
     int PriorObservations,
     int FreeValues,
+    double BetweenSourcesJoules,
     EnthalpyCovariance Covariance)
 {
     /// <summary>Observations less free values.</summary>

@@ -12,6 +12,9 @@ public static class OxideAssessment
     private const int MostRounds = 40;
     private const double SettledJoules = 1e-4;
 
+    /// <summary>Median of chi-squared with one degree of freedom: (0.67449)^2, the square of the normal distribution's upper quartile.</summary>
+    private const double MedianOfChiSquared = 0.454936;
+
     /// <summary>Standard error of an entropy nothing but the couples fixes, J/(mol K): wide enough to say nothing.</summary>
     private const double OpenEntropy = 10;
 
@@ -54,15 +57,18 @@ public static class OxideAssessment
             }
         }
 
+        ImmutableArray<AssessedMeasurement> compared = [.. table.Measurements.Select(measurement => Compare(measurement, model, table.Slopes, after, before, leftOut))];
+        double between = BetweenSources(compared);
         return new AssessmentResult(
             quantities.MoveToImmutable(),
-            [.. table.Measurements.Select(measurement => Compare(measurement, model, table.Slopes, after, before, leftOut))],
+            compared,
             chi,
             chiRaw,
             coupleObservations,
             priorObservations,
             free.Length,
-            CovarianceOf(priors, weighed, model, database, after));
+            between,
+            CovarianceOf(priors, weighed, between, model, database, after));
     }
 
     /// <summary>Products a user's measurements speak of that no prior names: free, with the database's own value and uncertainty as prior.</summary>
@@ -82,7 +88,7 @@ public static class OxideAssessment
     {
         int points = measurement.FitKelvin.Length;
         double spread = points > 2 ? Math.Sqrt(points / 2.0) : 1;
-        return measurement.FitKelvin.Select(kelvin => new Weighed(measurement, kelvin, spread * model.StandardError(measurement, kelvin, Slope(measurement, slopes))));
+        return measurement.FitKelvin.Select(kelvin => new Weighed(measurement, kelvin, spread, spread * model.StandardError(measurement, kelvin, Slope(measurement, slopes))));
     }
 
     private static double? Slope(Measurement measurement, ImmutableDictionary<string, double> slopes)
@@ -227,10 +233,38 @@ public static class OxideAssessment
     }
 
     /// <summary>
+    /// How far sources of one couple differ beyond their own errors (k = 1, J/mol O2): the t for which the median of d^2/(s^2 + t^2) over the measurements kept out is that of
+    /// chi-squared with one degree of freedom; d is the mean difference of each, s its standard error. They had no part in the adjustment, so they can tell; the median,
+    /// because a few of them are known to be wrong and are not followed.
+    /// </summary>
+    private static double BetweenSources(ImmutableArray<AssessedMeasurement> measurements)
+    {
+        (double Difference, double Error)[] kept =
+        [
+            .. measurements.Where(item => !item.Measurement.IsFit && item.Measurement.Kind is not (MeasurementKind.ReactionEnthalpy or MeasurementKind.InvariantTemperature))
+                .Select(item => (item.Points.Average(point => point.AfterJoules), item.StandardErrorJoules)),
+        ];
+        double Excess(double between) => MathNet.Numerics.Statistics.Statistics.Median(kept.Select(item => Square(item.Difference) / (Square(item.Error) + Square(between)))) - MedianOfChiSquared;
+        double low = 0, high = 20_000;
+        if (kept.Length == 0 || Excess(0) <= 0)
+        {
+            return 0;
+        }
+
+        for (int i = 0; i < 60; i++)
+        {
+            double middle = (low + high) / 2;
+            (low, high) = Excess(middle) > 0 ? (middle, high) : (low, middle);
+        }
+
+        return (low + high) / 2;
+    }
+
+    /// <summary>
     /// Covariance of all quantities the couples touch, the held ones at their published errors as well, and every entropy at its class default: holding a value
     /// chooses it, it does not make it certain.
     /// </summary>
-    private static EnthalpyCovariance CovarianceOf(ImmutableArray<MeasurementPrior> priors, Weighed[] weighed, CoupleModel model, SubstanceDatabase database, Dictionary<string, CoupleModel.Shift> after)
+    private static EnthalpyCovariance CovarianceOf(ImmutableArray<MeasurementPrior> priors, Weighed[] weighed, double between, CoupleModel model, SubstanceDatabase database, Dictionary<string, CoupleModel.Shift> after)
     {
         ImmutableArray<string> ids = [.. priors.Select(prior => prior.Substance).Distinct()];
         int n = ids.Length;
@@ -240,11 +274,12 @@ public static class OxideAssessment
         {
             CoupleModel.Difference difference = model.Of(point.Measurement, point.Kelvin, after);
             double[] row = new double[2 * n];
+            double sigma = Math.Sqrt(Square(point.Sigma) + Square(between * point.Spread));
             for (int i = 0; i < n; i++)
             {
                 double number = difference.Reaction.Terms.FirstOrDefault(term => term.Substance.Id == ids[i]).Number;
-                row[i] = number * scale[i] / point.Sigma;
-                row[n + i] = difference.HasEntropy ? -point.Kelvin * number * scale[n + i] / point.Sigma : 0;
+                row[i] = number * scale[i] / sigma;
+                row[n + i] = difference.HasEntropy ? -point.Kelvin * number * scale[n + i] / sigma : 0;
             }
 
             for (int i = 0; i < 2 * n; i++)
@@ -280,5 +315,5 @@ public static class OxideAssessment
 
     private static double Square(double value) => value * value;
 
-    private sealed record Weighed(Measurement Measurement, double Kelvin, double Sigma);
+    private sealed record Weighed(Measurement Measurement, double Kelvin, double Spread, double Sigma);
 }
