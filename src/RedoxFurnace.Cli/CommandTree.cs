@@ -17,6 +17,7 @@ internal static class CommandTree
         root.Subcommands.Add(AtmosphereCommand.Create(screen, common));
         root.Subcommands.Add(GasCommand.Create(screen, common));
         root.Subcommands.Add(ReadingCommand.Create(screen, common));
+        root.Subcommands.Add(ConstantCommand.Create(screen, common));
         root.Subcommands.Add(LadderCommand.Create(screen, common));
         root.Subcommands.Add(ChartCommand.Create(screen, common));
         root.Subcommands.Add(OxidesCommand.Create(screen, common));

@@ -21,6 +21,30 @@ public static class ReactionUncertainty
     public static double OfEnthalpy(Reaction reaction, double kelvin)
         => 2 * Math.Sqrt(Variance(Expand(reaction, kelvin), 0, null, substance => substance.Uncertainty.HeatJoules));
 
+    /// <summary>Expanded uncertainty (k = 2) of the entropy of reaction; the whole error of a reaction line may lie in its slope, so it counts over T.</summary>
+    /// <param name="reaction">The reaction.</param>
+    /// <param name="kelvin">Temperature, K.</param>
+    /// <param name="covariance">Covariance of assessed enthalpies and entropies, or null.</param>
+    /// <returns>J/K for the reaction as written.</returns>
+    public static double OfEntropy(Reaction reaction, double kelvin, EnthalpyCovariance? covariance)
+    {
+        (List<(Substance Substance, double Number)> substances, List<(ReactionLine Line, double Number)> lines) = Expand(reaction, kelvin);
+        double sum = covariance?.EntropyVariance(substances) ?? 0;
+        foreach ((Substance substance, double number) in substances.Where(term => covariance?.Has(term.Substance.Id) != true))
+        {
+            double own = number * substance.Uncertainty.EntropyJoulesPerKelvin / 2;
+            sum += own * own;
+        }
+
+        foreach ((ReactionLine line, double number) in lines)
+        {
+            double own = number * line.ExpandedUncertaintyOfLine!.Value / 2 / kelvin;
+            sum += own * own;
+        }
+
+        return 2 * Math.Sqrt(sum);
+    }
+
     /// <summary>Whether the uncertainty of any partner is a class default, so that the output must mark it.</summary>
     /// <param name="reaction">The reaction.</param>
     /// <returns>Formulas of those partners.</returns>

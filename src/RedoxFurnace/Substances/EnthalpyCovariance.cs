@@ -147,6 +147,24 @@ public sealed class EnthalpyCovariance
         return Math.Max(0, sum);
     }
 
+    /// <summary>Variance of a weighted sum of entropies, (J/K)^2 at k = 1, not below 0.</summary>
+    internal double EntropyVariance(IReadOnlyList<(Substance Substance, double Number)> terms)
+    {
+        double sum = 0;
+        foreach ((Substance first, double firstNumber) in terms)
+        {
+            foreach ((Substance second, double secondNumber) in terms)
+            {
+                if (_index.TryGetValue(first.Id, out int i) && _index.TryGetValue(second.Id, out int j))
+                {
+                    sum += firstNumber * secondNumber * _covariance[i + _count, j + _count];
+                }
+            }
+        }
+
+        return Math.Max(0, sum);
+    }
+
     /// <summary>Correlations too small to be told from rounding are written as 0.</summary>
     private static string Short(double value) => Math.Abs(value) < 1e-7 ? "0" : value.ToString("G9", CultureInfo.InvariantCulture);
 
