@@ -18,6 +18,8 @@ internal static class CommandTree
         root.Subcommands.Add(GasCommand.Create(screen, common));
         root.Subcommands.Add(ReadingCommand.Create(screen, common));
         root.Subcommands.Add(ConstantCommand.Create(screen, common));
+        root.Subcommands.Add(ChargeCommand.Create(screen, common));
+        root.Subcommands.Add(BatchHeatCommand.Create(screen, common));
         root.Subcommands.Add(LadderCommand.Create(screen, common));
         root.Subcommands.Add(ChartCommand.Create(screen, common));
         root.Subcommands.Add(OxidesCommand.Create(screen, common));

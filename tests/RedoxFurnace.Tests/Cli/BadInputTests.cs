@@ -119,6 +119,23 @@ public class BadInputTests
     }
 
     [Theory]
+    [InlineData("charge \"Cr2O4 1kg\" --at 1000C", "'Cr2O4'", "did you mean 'Cr2O3'?")]
+    [InlineData("charge \"Cr2O3 0kg\" --at 1000C", "above 0")]
+    [InlineData("charge \"Cr2O3\" --at 1000C", "not understood", "Cr2O3 1000kg")]
+    [InlineData("charge \"Cr2O3 5stone\" --at 1000C", "'stone'", "kg")]
+    [InlineData("charge \"\" --at 1000C", "empty")]
+    [InlineData("charge \"WO3 1kg\" --gas \"H2 20kg\" --at 800C", "'kg'", "Nm3")]
+    [InlineData("charge \"WO3 1kg\" --gas \"C 20Nm3\" --at 800C", "no gas")]
+    [InlineData("batch-heat \"Fe2O3 1kg, Al 1kg\" --moisture 140%", "'140%'", "0 to 100%")]
+    [InlineData("batch-heat \"Fe2O3 1kg, Al 1kg\" --from -80C", "-40 C")]
+    [InlineData("batch-heat \"CaC2 1kg\"", "'CaC2'", "no heat data")]
+    public void A_charge_that_cannot_be_is_refused(string line, params string[] parts) => ProgramRun.Of(line).IsRefused(Wrong, parts);
+
+    [Theory]
+    [InlineData("charge \"Cr2O3 1kg\" --at 8000C", "data")]
+    public void A_charge_above_all_data_is_refused(string line, params string[] parts) => ProgramRun.Of(line).IsRefused(Unanswerable, parts);
+
+    [Theory]
     [InlineData("rnk Cr2O3 --at 1400C", "'rnk'", "did you mean 'rank'?")]
     [InlineData("rank Cr2O3 --at 1400C --wth C", "'--wth'", "did you mean '--with'?")]
     [InlineData("rank Cr2O3 --at 1400C --by price", "'price'", "margin, crossover, mass, heat")]

@@ -162,8 +162,28 @@ internal static partial class CheckCalculation
 
     private static double PotentialOfOxygen(double bar, double kelvin) => PhysicalConstants.GasConstant * kelvin * Math.Log(bar);
 
+    /// <summary>Adiabatic temperature of a stoichiometric thermite at full equilibrium, or the gas it leaves there.</summary>
+    private static double ThermiteEnd(PublishedRow row)
+    {
+        Match names = Regex.Match(row["quantity"], @"of (Al|Mg) \+ (\w+)");
+        string reductant = names.Groups[1].Value;
+        Substance oxide = SubstanceDatabase.Bundled.Get(names.Groups[2].Value);
+        double moles = oxide.Formula.Of("O") * (reductant == "Al" ? 2.0 / 3 : 1);
+        RedoxFurnace.Charges.BatchHeatResult result = RedoxFurnace.Charges.BatchHeat.Of(
+            new RedoxFurnace.Charges.BatchHeatRequest([(oxide, 1), (SubstanceDatabase.Bundled.Get(reductant), moles)], Temperature.FromKelvin(298.15), 0, Pressure.FromBar(PhysicalConstants.AtmosphereInBar), null),
+            SubstanceDatabase.Bundled);
+        return row["quantity"].StartsWith("gas yield", StringComparison.Ordinal)
+            ? result.GasMoles / result.Kilograms
+            : row["unit"] == "C" ? result.Adiabatic!.Value.Celsius : result.Adiabatic!.Value.Kelvin;
+    }
+
     private static double ThermiteHeat(PublishedRow row)
     {
+        if (row["quantity"].StartsWith("adiabatic T", StringComparison.Ordinal) || row["quantity"].StartsWith("gas yield", StringComparison.Ordinal))
+        {
+            return ThermiteEnd(row);
+        }
+
         if (row["quantity"].StartsWith("dH298 of 2Al + ", StringComparison.Ordinal))
         {
             string oxide = row["quantity"].Split(" + ")[1];

@@ -6,7 +6,7 @@ namespace RedoxFurnace.Tests.Published;
 public class CheckValueTests
 {
     private static readonly string[] Subjects =
-        ["gas ratios", "buffers", "graphite", "carbothermic onset", "silicothermic magnesium", "probe", "thermite heat", "furnace practice"];
+        ["gas ratios", "buffers", "graphite", "carbothermic onset", "silicothermic magnesium", "probe", "thermite heat", "thermite temperature", "furnace practice"];
 
     /// <summary>Rows nothing was fitted to.</summary>
     public static TheoryData<string> Tested => CheckLedger.Of("tested", Subjects);
