@@ -110,8 +110,9 @@ public class TrapTests
     public void A_reading_without_scale_is_taken_both_ways_and_asked_for_where_the_verdicts_differ()
     {
         // Between the frost and the dew meaning of one reading lies the limit of chromium.
-        double limit = Plan(Bright).Facts.SoakGas[0].Metals.First(metal => metal.Element.Symbol == "Cr").LimitWater!.Value.FrostPointKelvin!.Value - 273.15;
-        CampaignPlan plan = Plan(With(Bright, "frost -60C", FormattableString.Invariant($"moisture {limit - 1:0.0}C")));
+        string cool = With(Bright, "soak, at: 1050C", "soak, at: 820C").Replace("cool, at: 1000C", "cool, at: 810C", StringComparison.Ordinal);
+        double limit = Plan(cool).Facts.SoakGas[0].Metals.First(metal => metal.Element.Symbol == "Cr").LimitWater!.Value.FrostPointKelvin!.Value - 273.15;
+        CampaignPlan plan = Plan(With(cool, "frost -60C", FormattableString.Invariant($"moisture {limit - 2:0.0}C")));
         Assert.Equal(RedoxFurnace.Reductants.JobVerdict.NotDecidable, plan.Judgement.Verdict);
         Assert.NotEmpty(plan.Ask);
     }
