@@ -111,11 +111,11 @@ internal static class ConstantCommand
     {
         string turning = constants.Turning.IsEmpty
             ? $"it never turns between {Temperature.FromKelvin(constants.DataRange.Low)} and {Temperature.FromKelvin(constants.DataRange.High)}"
-            : string.Join(", ", constants.Turning.Select(turn => $"{(turn.IsFloor ? "goes above" : "goes below")} {Temperature.FromKelvin(turn.Kelvin)}"));
+            : string.Join(", ", constants.Turning.Select(turn => $"{(turn.IsFloor ? "goes above" : "goes below")} {Printed.Fixed(turn.Kelvin - PhysicalConstants.ZeroCelsiusInKelvin, 0)} C"));
         ConstantRow[] known = [.. rows.Where(row => row.Driving is not null)];
         int right = known.Count(row => row.Driving > 0);
-        string direction = right == known.Length ? "to the right" : right == 0 ? "to the left" : "to the right at some of the temperatures";
-        return $"{constants.Reaction.Text}: driven {direction} at {(known.Length == 1 ? Temperature.FromKelvin(known[0].Kelvin).ToString() : "the temperatures asked for")}; {turning}.";
+        string direction = right == known.Length ? "to the right" : right == 0 ? "to the left" : $"to the right at {Printed.Fixed(right, 0)} of {Printed.Fixed(known.Length, 0)} temperatures";
+        return $"{constants.Reaction.Text}: driven {direction}{(known.Length == 1 ? $" at {Temperature.FromKelvin(known[0].Kelvin)}" : string.Empty)}; {turning}.";
     }
 
     private static IEnumerable<string> Notes(ReactionConstants constants, ConstantRow[] rows, bool changed, string? from)

@@ -16,9 +16,10 @@ public class OutputDocumentTests
     {
         Section section = Sections[shape];
         Assert.NotNull(section.Command);
-        // OUT stands for a place to write to.
+        // OUT stands for a place to write to, DATA for a file of measured points.
         using ScratchFolder scratch = new();
-        ProgramRun run = ProgramRun.Of(section.Command["redoxfurnace ".Length..].Replace("OUT", scratch["out"], StringComparison.Ordinal).Replace("charts/campaigns/", Path.Combine(Repository.Root, "charts", "campaigns") + "/", StringComparison.Ordinal));
+        File.WriteAllText(scratch["data.csv"], "temperature_C,emf_mV\n800,730\n900,690\n1000,645\n1100,605\n");
+        ProgramRun run = ProgramRun.Of(section.Command["redoxfurnace ".Length..].Replace("OUT", scratch["out"], StringComparison.Ordinal).Replace("DATA", scratch["data.csv"], StringComparison.Ordinal).Replace("charts/campaigns/", Path.Combine(Repository.Root, "charts", "campaigns") + "/", StringComparison.Ordinal));
         JsonElement answer = run.Json();
         Assert.Equal(shape, answer.GetProperty("schema").GetString());
         SortedSet<string> written = new(StringComparer.Ordinal);
