@@ -16,6 +16,7 @@ internal static class OxidesCommand
         command.Subcommands.Add(CreateShow(screen, common));
         command.Subcommands.Add(OxidesCheckCommand.Create(screen, common));
         command.Subcommands.Add(OxidesAssessCommand.Create(screen, common));
+        command.Subcommands.Add(OxidesAgainstCommand.Create(screen, common));
         command.Subcommands.Add(OxidesFitCommand.Create(screen, common));
         command.Subcommands.Add(OxidesWhyCommand.Create(screen, common));
         return command;

@@ -12,7 +12,7 @@ public static class CoupleFit
 {
     private const int FewestPoints = 3;
     private const double Confidence = 0.95;
-    private const double OncePerSets = 0.01;
+    private const double OncePerSets = 0.05;
     private const double RoundingJoules = 1e-6;
 
     /// <summary>Fits.</summary>
@@ -101,7 +101,7 @@ public static class CoupleFit
         Line without = Line.Through(rest, [.. others.Select(i => points[i].Joules)], [.. others.Select(i => weights[i])], knownErrors);
         double variance = (without.Scale / weights[index]) + Math.Pow(without.StandardErrorAt(point.Kelvin), 2) + (RoundingJoules * RoundingJoules);
         double pull = (point.Joules - without.At(point.Kelvin)) / Math.Sqrt(variance);
-        // One chance in a hundred for the whole set: each point's share of it, on two sides (Bonferroni).
+        // One chance in twenty for the whole set: each point's share of it, on two sides (Bonferroni).
         double allowed = StudentT.InvCDF(0, 1, others.Length - 2, 1 - (OncePerSets / (2 * x.Length)));
         return new FittedPoint(point, residual, pull, Math.Abs(pull) > allowed, offDatabase);
     }
