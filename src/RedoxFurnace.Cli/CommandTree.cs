@@ -14,6 +14,7 @@ internal static class CommandTree
         common.AddTo(root);
         root.Subcommands.Add(PlanCommand.Create(screen, common));
         root.Subcommands.Add(RankCommand.Create(screen, common));
+        root.Subcommands.Add(OverviewCommand.Create(screen, common));
         root.Subcommands.Add(AtmosphereCommand.Create(screen, common));
         root.Subcommands.Add(GasCommand.Create(screen, common));
         root.Subcommands.Add(ReadingCommand.Create(screen, common));

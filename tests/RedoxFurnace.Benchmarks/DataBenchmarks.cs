@@ -1,4 +1,6 @@
+using System.Collections.Immutable;
 using RedoxFurnace.Quantities;
+using RedoxFurnace.Reductants;
 using RedoxFurnace.Substances;
 
 namespace RedoxFurnace.Benchmarks;
@@ -25,6 +27,23 @@ internal static class DataBenchmarks
         double bare = BareSeconds();
         GC.KeepAlive(sum);
         yield return new BenchmarkRow("G(T) of a substance of several phases", ours, "bare nine-coefficient polynomial", bare, "at most 3 times");
+    }
+
+    /// <summary>Every simple oxide against every listed reductant at 100 temperatures, against as many bare evaluations as there are margins.</summary>
+    public static IEnumerable<BenchmarkRow> Ranking()
+    {
+        SubstanceDatabase database = SubstanceDatabase.Bundled;
+        ImmutableArray<string> oxides = [.. database.All
+            .Where(substance => !substance.IsGas && substance.Formula.Atoms.Count == 2 && substance.Formula.Of("O") > 0)
+            .Where(oxide => oxide.Formula.Atoms.Keys.All(element => element is not ("H" or "C" or "N")) && database.Metal(oxide.Formula.Atoms.Keys.First(element => element != "O")) is not null)
+            .Select(oxide => oxide.Id)];
+        ImmutableArray<string> reductants = [.. ReductantCatalogue.Of(database).Listed.Select(reductant => reductant.Id)];
+        ImmutableArray<Temperature> at = [.. Enumerable.Range(0, 100).Select(i => Temperature.FromKelvin(500 + (15 * i)))];
+        double seconds = Stopwatches.Median(() => MarginTable.Of(oxides, reductants, at, new RankConditions(), database));
+        long margins = (long)oxides.Length * reductants.Length * at.Length;
+        yield return new BenchmarkRow($"margins of {oxides.Length} oxides against {reductants.Length} reductants at {at.Length} temperatures", seconds, $"{margins} bare polynomial evaluations", margins * BareSeconds(), "at most 10 times");
+        RankRequest request = new("Cr2O3", null, Temperature.FromCelsius(1400), [], new RankConditions(), default);
+        yield return new BenchmarkRow("whole ranking of Cr2O3, crossovers, masses and side products too", Stopwatches.Median(() => ReductantRanking.Rank(request, database)), "", null, "");
     }
 
     /// <summary>Time of one bare evaluation of a nine-coefficient polynomial.</summary>

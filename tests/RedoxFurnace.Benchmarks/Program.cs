@@ -5,6 +5,9 @@ using RedoxFurnace.Benchmarks;
 (string Name, Func<IEnumerable<BenchmarkRow>> Run)[] topics =
 [
     ("data", DataBenchmarks.Run),
+    ("ranking", DataBenchmarks.Ranking),
+    ("charts", ChartBenchmarks.Run),
+    ("charge", ChargeBenchmarks.Run),
     ("gas", GasBenchmarks.Run),
 ];
 

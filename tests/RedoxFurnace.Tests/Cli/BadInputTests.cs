@@ -119,6 +119,9 @@ public class BadInputTests
     }
 
     [Theory]
+    [InlineData("overview --at 1200C --of FeCr2O4", "not a simple condensed oxide")]
+    [InlineData("overview --at 1200C --with Qq", "'Qq'")]
+    [InlineData("overview --at 1200", "no unit")]
     [InlineData("charge \"Cr2O4 1kg\" --at 1000C", "'Cr2O4'", "did you mean 'Cr2O3'?")]
     [InlineData("charge \"Cr2O3 0kg\" --at 1000C", "above 0")]
     [InlineData("charge \"Cr2O3\" --at 1000C", "not understood", "Cr2O3 1000kg")]

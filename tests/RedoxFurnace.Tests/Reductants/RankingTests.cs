@@ -137,6 +137,43 @@ public class RankingTests
         Assert.Equal(chromia - alumina, Row("Cr2O3", kelvin, "Al").Margin!.Value, 1e-6);
     }
 
+    /// <summary>The table of many margins is the ranking's own, oxide by oxide, at cold and hot ends and past the data.</summary>
+    [Fact]
+    public void The_table_of_margins_holds_the_margins_of_the_ranking()
+    {
+        ImmutableArray<string> oxides = ["Cr2O3", "Fe2O3", "Fe0.947O", "MnO", "SiO2", "TiO2", "MgO", "V2O5"];
+        ImmutableArray<string> reductants = ["C", "H2", "CO", "Al", "Mg", "Si", "CaC2", "SiC"];
+        ImmutableArray<Temperature> at = [.. new[] { 500.0, 900, 1300, 1700, 2100, 2600 }.Select(Temperature.FromKelvin)];
+        MarginTable table = MarginTable.Of(oxides, reductants, at, new RankConditions(), SubstanceDatabase.Bundled);
+        int compared = 0;
+        for (int t = 0; t < at.Length; t++)
+        {
+            for (int o = 0; o < oxides.Length; o++)
+            {
+                foreach ((int r, string reductant) in reductants.Index())
+                {
+                    double? ranked;
+                    try
+                    {
+                        ranked = Row(oxides[o], at[t].Kelvin, reductant).Margin;
+                    }
+                    catch (NoAnswerException)
+                    {
+                        continue;
+                    }
+
+                    if (ranked is { } margin && table.Margin(o, r, t) is { } own)
+                    {
+                        Assert.Equal(margin, own, 1e-6);
+                        compared++;
+                    }
+                }
+            }
+        }
+
+        Assert.True(compared > 200, $"{compared} compared");
+    }
+
     private static RankedReductant Row(string oxide, double kelvin, string reductant, RankConditions? conditions = null)
         => Rank(oxide, kelvin, [reductant], conditions).Rows.Single();
 

@@ -1,0 +1,139 @@
+using System.Collections.Immutable;
+using RedoxFurnace.Oxidation;
+using RedoxFurnace.Quantities;
+using RedoxFurnace.Substances;
+
+namespace RedoxFurnace.Reductants;
+
+/// <summary>
+/// Margins of many oxides against many reductants at many temperatures. Each oxide's hardest step and each reductant's first step is
+/// evaluated once a temperature; a margin is then one subtraction. Crossovers and masses are the ranking's business.
+/// </summary>
+public sealed class MarginTable
+{
+    private readonly double[] _margins;
+
+    private MarginTable(ImmutableArray<string> oxides, ImmutableArray<string> reductants, ImmutableArray<Temperature> at, double[] margins)
+    {
+        Oxides = oxides;
+        Reductants = reductants;
+        At = at;
+        _margins = margins;
+    }
+
+    /// <summary>Simple oxides, formulas.</summary>
+    public ImmutableArray<string> Oxides { get; }
+
+    /// <summary>Reductants by name.</summary>
+    public ImmutableArray<string> Reductants { get; }
+
+    /// <summary>Temperatures.</summary>
+    public ImmutableArray<Temperature> At { get; }
+
+    /// <summary>Margin, J per mole of O2; null without data, or of an oxide against its own metal.</summary>
+    /// <param name="oxide">Index of the oxide.</param>
+    /// <param name="reductant">Index of the reductant.</param>
+    /// <param name="at">Index of the temperature.</param>
+    /// <returns>As <see cref="ReductantRanking"/> gives it, unit activities and each gas at 1 bar.</returns>
+    public double? Margin(int oxide, int reductant, int at)
+    {
+        double margin = _margins[(((at * Oxides.Length) + oxide) * Reductants.Length) + reductant];
+        return double.IsNaN(margin) ? null : margin;
+    }
+
+    /// <summary>Reckons a table.</summary>
+    /// <param name="oxides">Formulas of simple oxides.</param>
+    /// <param name="reductants">Names.</param>
+    /// <param name="at">Temperatures.</param>
+    /// <param name="conditions">Gas ratios; total pressure and CO pressure are not used here.</param>
+    /// <param name="database">Data.</param>
+    /// <returns>The table.</returns>
+    /// <exception cref="RequestException">Unknown oxide or reductant.</exception>
+    public static MarginTable Of(ImmutableArray<string> oxides, ImmutableArray<string> reductants, ImmutableArray<Temperature> at, RankConditions conditions, SubstanceDatabase database)
+    {
+        GasReactions gases = new(database);
+        ReductantCatalogue catalogue = ReductantCatalogue.Of(database);
+        ReductantModel[] models = [.. reductants.Select(name => ReductantModel.Of(catalogue.Get(name), database, gases, conditions, Activities.AllOne))];
+        Substance[] substances = [.. oxides.Select(database.Get)];
+        // Oxides of one metal share its ladder.
+        Dictionary<string, OxideSystem> systems = [];
+        string[] metals = [.. substances.Select(oxide => oxide.Formula.Atoms.Keys.Single(element => element != "O"))];
+        foreach (string metal in metals.Distinct())
+        {
+            systems.Add(metal, OxideSystem.OfMetal(metal, database, Activities.AllOne));
+        }
+
+        double[] margins = new double[at.Length * oxides.Length * models.Length];
+        double[] potentials = new double[models.Length];
+        Dictionary<string, OxideLadder?> ladders = [];
+        for (int t = 0; t < at.Length; t++)
+        {
+            double kelvin = at[t].Kelvin;
+            ladders.Clear();
+            for (int r = 0; r < models.Length; r++)
+            {
+                potentials[r] = Potential(models[r], kelvin);
+            }
+
+            for (int o = 0; o < substances.Length; o++)
+            {
+                if (!ladders.TryGetValue(metals[o], out OxideLadder? ladder))
+                {
+                    ladder = LadderOf(systems[metals[o]], kelvin);
+                    ladders.Add(metals[o], ladder);
+                }
+
+                double hardest = Hardest(ladder, substances[o], metals[o], kelvin);
+                int row = ((t * substances.Length) + o) * models.Length;
+                for (int r = 0; r < models.Length; r++)
+                {
+                    margins[row + r] = models[r].Info.Metal == metals[o] ? double.NaN : hardest - potentials[r];
+                }
+            }
+        }
+
+        return new MarginTable(oxides, reductants, at, margins);
+    }
+
+    private static double Potential(ReductantModel model, double kelvin)
+    {
+        if (kelvin < model.LowestKelvin || kelvin > model.HighestKelvin)
+        {
+            return double.NaN;
+        }
+
+        try
+        {
+            return model.StepsAt(kelvin, null)[0].OxygenPotential;
+        }
+        catch (NoAnswerException)
+        {
+            return double.NaN;
+        }
+    }
+
+    private static OxideLadder? LadderOf(OxideSystem system, double kelvin)
+        => system.Elements[0].TryGibbs(kelvin, out _) ? system.LadderAt(kelvin) : null;
+
+    /// <summary>The lowest oxygen potential of the steps from the metal up to the oxide.</summary>
+    private static double Hardest(OxideLadder? ladder, Substance oxide, string metal, double kelvin)
+    {
+        if (ladder is null || !oxide.TryGibbs(kelvin, out _))
+        {
+            return double.NaN;
+        }
+
+        int own = ladder.RungOf(oxide);
+        int top = own >= 0 ? own : ladder.RungReaching(oxide.Formula.Of("O") / oxide.Formula.Of(metal));
+        double least = double.NaN;
+        for (int i = 0; i < top && i < ladder.Steps.Length; i++)
+        {
+            if (ladder.Steps[i].OxygenPotential is { } potential && !(potential >= least))
+            {
+                least = potential;
+            }
+        }
+
+        return least;
+    }
+}
