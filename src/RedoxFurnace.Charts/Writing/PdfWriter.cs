@@ -1,6 +1,6 @@
 using System.Collections.Immutable;
-using SkiaSharp;
 using RedoxFurnace.Charts.Scenes;
+using SkiaSharp;
 
 namespace RedoxFurnace.Charts.Writing;
 

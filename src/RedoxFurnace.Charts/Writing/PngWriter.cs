@@ -1,6 +1,6 @@
-using SkiaSharp;
 using RedoxFurnace.Charts.Scenes;
 using RedoxFurnace.Quantities;
+using SkiaSharp;
 
 namespace RedoxFurnace.Charts.Writing;
 

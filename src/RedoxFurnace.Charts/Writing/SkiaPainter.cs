@@ -1,5 +1,5 @@
-using SkiaSharp;
 using RedoxFurnace.Charts.Scenes;
+using SkiaSharp;
 
 namespace RedoxFurnace.Charts.Writing;
 

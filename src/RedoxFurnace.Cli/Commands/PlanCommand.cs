@@ -39,10 +39,12 @@ internal static class PlanCommand
 
             string file = parsed.GetValue(sheet) ?? throw new RequestException("'plan' needs a campaign sheet; copy one from charts/campaigns, or write one with 'plan --new KIND'");
             SubstanceDatabase database = common.Database(parsed);
-            Progress progress = new(screen.Error);
-            CampaignPlan plan = CampaignPlanning.Of(Read(file), Path.GetFileName(file), database, ChartCommand.Version, parsed.GetValue(date), progress.Say);
-            IReadOnlyList<PlanSection> sections = PlanDocument.Of(plan);
+            string yaml = Read(file);
             string folder = parsed.GetValue(to) ?? Path.GetFileNameWithoutExtension(file) + "-plan";
+            PlanFolder.Check(folder, parsed.GetValue(force));
+            Progress progress = new(screen.Error);
+            CampaignPlan plan = CampaignPlanning.Of(yaml, Path.GetFileName(file), database, ChartCommand.Version, parsed.GetValue(date), progress.Say);
+            IReadOnlyList<PlanSection> sections = PlanDocument.Of(plan);
             (IReadOnlyList<(string Name, byte[] Content)> files, string[] failed) = Files(plan, sections, database, progress);
             PlanFolder.Write(folder, files, parsed.GetValue(force));
             return screen.Show(Present(plan, sections, folder, files, failed), common.Form(parsed));

@@ -11,7 +11,8 @@ internal static class PlanFolder
 {
     private const string Index = "plan.json";
 
-    public static void Write(string folder, IReadOnlyList<(string Name, byte[] Content)> files, bool force)
+    /// <summary>Refuses a place that cannot take a plan, before any work is done.</summary>
+    public static void Check(string folder, bool force)
     {
         string full = Path.GetFullPath(folder);
         if (File.Exists(full))
@@ -29,7 +30,12 @@ internal static class PlanFolder
         {
             CheckOwn(folder, full, force);
         }
+    }
 
+    public static void Write(string folder, IReadOnlyList<(string Name, byte[] Content)> files, bool force)
+    {
+        Check(folder, force);
+        string full = Path.GetFullPath(folder);
         string beside = full.TrimEnd(Path.DirectorySeparatorChar) + ".part";
         try
         {

@@ -65,25 +65,25 @@ public sealed class MarginTable
 
         double[] margins = new double[at.Length * oxides.Length * models.Length];
         double[] potentials = new double[models.Length];
-        Dictionary<string, OxideLadder?> ladders = [];
+        Dictionary<string, double> firstSteps = [];
         for (int t = 0; t < at.Length; t++)
         {
             double kelvin = at[t].Kelvin;
-            ladders.Clear();
+            firstSteps.Clear();
+            double oxygen = gases.Oxygen.Gibbs(kelvin);
+            foreach ((string metal, OxideSystem system) in systems)
+            {
+                firstSteps[metal] = FirstStep(system, metal, kelvin, oxygen);
+            }
+
             for (int r = 0; r < models.Length; r++)
             {
-                potentials[r] = Potential(models[r], kelvin);
+                potentials[r] = models[r].Info.Metal is { } metal && firstSteps.TryGetValue(metal, out double known) && models[r].Info.Kind == ReductantKind.Metal ? known : Potential(models[r], kelvin);
             }
 
             for (int o = 0; o < substances.Length; o++)
             {
-                if (!ladders.TryGetValue(metals[o], out OxideLadder? ladder))
-                {
-                    ladder = LadderOf(systems[metals[o]], kelvin);
-                    ladders.Add(metals[o], ladder);
-                }
-
-                double hardest = Hardest(ladder, substances[o], metals[o], kelvin);
+                double hardest = substances[o].TryGibbs(kelvin, out _) ? firstSteps[metals[o]] : double.NaN;
                 int row = ((t * substances.Length) + o) * models.Length;
                 for (int r = 0; r < models.Length; r++)
                 {
@@ -112,28 +112,31 @@ public sealed class MarginTable
         }
     }
 
-    private static OxideLadder? LadderOf(OxideSystem system, double kelvin)
-        => system.Elements[0].TryGibbs(kelvin, out _) ? system.LadderAt(kelvin) : null;
-
-    /// <summary>The lowest oxygen potential of the steps from the metal up to the oxide.</summary>
-    private static double Hardest(OxideLadder? ladder, Substance oxide, string metal, double kelvin)
+    /// <summary>
+    /// The first step from a metal up. Along a lower hull slopes rise, so the first step is the one of lowest oxygen potential, the hardest of every
+    /// oxide of the metal; and it is the least of the slopes from the metal to any oxide, so no hull is needed.
+    /// </summary>
+    private static double FirstStep(OxideSystem system, string metal, double kelvin, double oxygen)
     {
-        if (ladder is null || !oxide.TryGibbs(kelvin, out _))
+        double own = system.Elements[0].TryGibbs(kelvin, out double condensed) ? condensed : double.NaN;
+        if (system.Vapours[0] is { } vapour && vapour.TryGibbs(kelvin, out double gas) && !(gas >= own))
         {
-            return double.NaN;
+            own = gas;
         }
 
-        int own = ladder.RungOf(oxide);
-        int top = own >= 0 ? own : ladder.RungReaching(oxide.Formula.Of("O") / oxide.Formula.Of(metal));
         double least = double.NaN;
-        for (int i = 0; i < top && i < ladder.Steps.Length; i++)
+        foreach (Substance oxide in system.Oxides)
         {
-            if (ladder.Steps[i].OxygenPotential is { } potential && !(potential >= least))
+            if (oxide.TryGibbs(kelvin, out double gibbs))
             {
-                least = potential;
+                double slope = 2 * (gibbs - (oxide.Formula.Of(metal) * own)) / oxide.Formula.Of("O");
+                if (!(slope >= least))
+                {
+                    least = slope;
+                }
             }
         }
 
-        return least;
+        return least - oxygen;
     }
 }
