@@ -9,6 +9,7 @@ using RedoxFurnace.Benchmarks;
     ("charts", ChartBenchmarks.Run),
     ("charge", ChargeBenchmarks.Run),
     ("gas", GasBenchmarks.Run),
+    ("assess", AssessBenchmarks.Run),
 ];
 
 Console.WriteLine("| what | one call | against | baseline | ratio | goal |");

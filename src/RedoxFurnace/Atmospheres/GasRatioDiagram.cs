@@ -75,9 +75,9 @@ public sealed record GasRatioDiagram
         OxideLadder[] ladders = [.. grid.Select(kelvin => system.LadderAt(kelvin, null))];
         return new GasRatioDiagram(
             element,
-            Boundaries(ladders, reactions.CarbonMonoxideOxidation),
-            Boundaries(ladders, reactions.HydrogenOxidation),
-            [.. graphitePressures.Select(pressure => new GraphiteBoundary(pressure, [.. grid.Select(kelvin => OverGraphite(kelvin, pressure, reactions))]))],
+            Boundaries(ladders, reactions.CarbonMonoxideOxidation, database.Covariance),
+            Boundaries(ladders, reactions.HydrogenOxidation, database.Covariance),
+            [.. graphitePressures.Select(pressure => new GraphiteBoundary(pressure, [.. grid.Select(kelvin => OverGraphite(kelvin, pressure, reactions, database.Covariance))]))],
             invariants,
             [.. ladders.SelectMany(ladder => ladder.Steps).SelectMany(step => step.Couple.Formation.Terms)
                 .Concat(reactions.CarbonMonoxideOxidation.Terms).Concat(reactions.HydrogenOxidation.Terms).Concat(reactions.GraphiteToMonoxide.Terms)
@@ -85,20 +85,20 @@ public sealed record GasRatioDiagram
     }
 
     /// <summary>Boudouard: ln K = ln r + ln pCO and pCO = P r/(1 + r), so ln r moves by (1 + r)/(2 + r) of ln K.</summary>
-    private static GasRatioPoint OverGraphite(double kelvin, Pressure pressure, GasReactions reactions)
+    private static GasRatioPoint OverGraphite(double kelvin, Pressure pressure, GasReactions reactions, EnthalpyCovariance? covariance)
     {
         (double share, double potential) = reactions.AboveGraphite(kelvin, pressure.NaturalLogBar);
-        double ofConstant = Relative(reactions.GraphiteToMonoxide.Plus(1, reactions.CarbonMonoxideOxidation, -1), kelvin);
+        double ofConstant = Relative(reactions.GraphiteToMonoxide.Plus(1, reactions.CarbonMonoxideOxidation, -1), kelvin, covariance);
         return Point(kelvin, GasReactions.RatioOfPotential(reactions.CarbonMonoxideOxidation, kelvin, potential), ofConstant / (2 - share));
     }
 
     private static GasRatioPoint Point(double kelvin, double logRatio, double uncertainty) => new(kelvin, 1 / (1 + Math.Exp(-logRatio)), logRatio, uncertainty);
 
     /// <summary>Expanded uncertainty of ln of a gas ratio, from a reaction of which one mole O2 moves two moles of gas.</summary>
-    private static double Relative(Reaction reaction, double kelvin) => ReactionUncertainty.OfGibbs(reaction, kelvin, null) / (2 * PhysicalConstants.GasConstant * kelvin);
+    private static double Relative(Reaction reaction, double kelvin, EnthalpyCovariance? covariance) => ReactionUncertainty.OfGibbs(reaction, kelvin, covariance) / (2 * PhysicalConstants.GasConstant * kelvin);
 
     /// <summary>One boundary for each run of neighbouring temperatures at which a couple stands on the ladder.</summary>
-    private static ImmutableArray<GasRatioBoundary> Boundaries(OxideLadder[] ladders, Reaction oxidation)
+    private static ImmutableArray<GasRatioBoundary> Boundaries(OxideLadder[] ladders, Reaction oxidation, EnthalpyCovariance? covariance)
     {
         List<GasRatioBoundary> finished = [];
         Dictionary<string, (LadderStep Step, List<GasRatioPoint> Points)> running = new(StringComparer.Ordinal);
@@ -118,7 +118,7 @@ public sealed record GasRatioDiagram
                     running[name] = run = (step, []);
                 }
 
-                run.Points.Add(Point(ladder.Kelvin, GasReactions.RatioOfPotential(oxidation, ladder.Kelvin, step.OxygenPotential!.Value), Relative(step.Couple.Formation.Plus(1, oxidation, -1), ladder.Kelvin)));
+                run.Points.Add(Point(ladder.Kelvin, GasReactions.RatioOfPotential(oxidation, ladder.Kelvin, step.OxygenPotential!.Value), Relative(step.Couple.Formation.Plus(1, oxidation, -1), ladder.Kelvin, covariance)));
             }
         }
 

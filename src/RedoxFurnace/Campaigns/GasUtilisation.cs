@@ -72,7 +72,7 @@ internal sealed record GasUtilisation(
             }
 
             double logRatio = GasReactions.RatioOfPotential(oxidation, kelvin, potential);
-            double uncertainty = ReactionUncertainty.OfGibbs(step.Couple.Formation.Plus(1, oxidation, -1), kelvin, null) / (2 * PhysicalConstants.GasConstant * kelvin);
+            double uncertainty = ReactionUncertainty.OfGibbs(step.Couple.Formation.Plus(1, oxidation, -1), kelvin, database.Covariance) / (2 * PhysicalConstants.GasConstant * kelvin);
             double balance = Share(logRatio);
             double needed = balance > inlet ? running / (balance - inlet) : double.PositiveInfinity;
             least = Math.Max(least, needed);

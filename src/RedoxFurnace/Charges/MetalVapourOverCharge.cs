@@ -42,7 +42,7 @@ internal sealed record MetalVapourOverCharge(double Drawn, double NaturalLogBar,
                     share,
                     (potential - vapour.Gibbs(kelvin)) / (PhysicalConstants.GasConstant * kelvin),
                     reaction.Text,
-                    ReactionUncertainty.OfGibbs(reaction, kelvin, null) / (PhysicalConstants.GasConstant * kelvin),
+                    ReactionUncertainty.OfGibbs(reaction, kelvin, database.Covariance) / (PhysicalConstants.GasConstant * kelvin),
                     [.. minimum.Phases.Select(phase => phase.Phase.Group ?? phase.Phase.Id).Distinct()]));
             }
             catch (NoAnswerException)

@@ -51,6 +51,17 @@ public class GasRatioDiagramTests
         Assert.Equal(685, crossing - 273.15, 30.0);
     }
 
+    /// <summary>The emf cells of Cr/Cr2O3 (Holzheid and O'Neill 1995) repeat to better than 1 kJ/mol O2; the calorimetric error of Cr2O3, 8.4 kJ/mol (Robie and Hemingway 1995), alone makes 5.6.</summary>
+    [Fact]
+    public void A_boundary_is_known_as_well_as_its_couple_was_measured_not_as_its_oxide_by_itself()
+    {
+        GasRatioBoundary chromia = Diagram("Cr").Hydrogen.Single(line => line.Couple == "Cr/Cr2O3");
+        foreach (GasRatioPoint point in chromia.Points.Where(point => point.Kelvin is > 1100 and < 1400))
+        {
+            Assert.InRange(point.ExpandedUncertainty * 2 * PhysicalConstants.GasConstant * point.Kelvin / 1000, 0.5, 3);
+        }
+    }
+
     /// <summary>FeO stands above about 570 C only, and near 850 C one pass can use only about one third of H2 or CO (common practice, no source).</summary>
     [Fact]
     public void One_pass_over_wustite_uses_about_a_third_of_the_gas()
