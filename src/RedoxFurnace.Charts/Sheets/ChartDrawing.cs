@@ -21,11 +21,12 @@ public static class ChartDrawing
     /// <exception cref="RequestException">A setting is wrong.</exception>
     /// <exception cref="DocumentException">A setting of a sheet is wrong.</exception>
     /// <exception cref="NoAnswerException">No data for what is asked.</exception>
-    public static DrawnChart Draw(ChartSettings settings, SubstanceDatabase database, string version) => settings.Word("kind", "stability", "oxygen-pressure", "van-t-hoff", "margins", "gas-ratio") switch
+    public static DrawnChart Draw(ChartSettings settings, SubstanceDatabase database, string version) => settings.Word("kind", "stability", "oxygen-pressure", "van-t-hoff", "margins", "gas-ratio", "phases") switch
     {
         "oxygen-pressure" => OxygenPressureDrawing.Draw(settings, database, version),
         "van-t-hoff" => VantHoffDrawing.Draw(settings, database, version),
         "margins" => MarginDrawing.Draw(settings, database, version),
+        "phases" => PhaseAmountDrawing.Draw(settings, database, version),
         "gas-ratio" => GasRatioDrawing.Draw(settings, database, version),
         _ => StabilityDrawing.Draw(settings, database, version),
     };
