@@ -65,6 +65,14 @@ internal static class RankJson
         writer.Number("margin_kJ_per_mol_O2", row.Margin / 1000);
         writer.Number("uncertainty_kJ_per_mol_O2", row.ExpandedUncertainty / 1000);
         writer.WriteString("verdict", RankWords.Of(row.Verdict));
+        writer.Number("probability_reduces", row.ProbabilityReduces);
+        writer.WriteStartArray("first_crossover_percentiles_K");
+        foreach (double kelvin in row.CrossoverPercentiles)
+        {
+            writer.WriteNumberValue(kelvin);
+        }
+
+        writer.WriteEndArray();
         WriteCrossovers(writer, row.Crossovers);
         writer.WriteString("balance_reaction", row.BalanceReaction);
         writer.WriteString("furthest_product", row.FurthestProduct);

@@ -20,7 +20,7 @@ internal static class RankPresenter
         return new Answer
         {
             Headline = string.Join("\n", results.Take(1).Select(result => result.Headline)) + (one ? string.Empty : $" ({results.Length} points in all.)"),
-            Tables = [.. one ? Single(results[0], us) : Several(results, temperatures), .. steps ? StepTables(results, temperatures) : []],
+            Tables = [.. one ? Single(results[0], us) : Several(results, temperatures), .. steps ? StepTables(results, temperatures) : [], .. SampleTables(results, temperatures)],
             Notes = [.. results.SelectMany(result => result.Notes.Concat(result.Rows.SelectMany(row => row.Notes.Select(note => $"{row.Reductant.Id}: {note}")))).Distinct()],
             Assumptions = [.. results.SelectMany(result => result.Assumptions).Distinct().Take(one ? 20 : 12)],
             Hazards = hazards,
@@ -117,5 +117,19 @@ internal static class RankPresenter
             [.. results.SelectMany(result => result.Rows.SelectMany(row => row.Steps.Select(step => (IReadOnlyList<Cell>)[
                 .. temperatures.Cells(result.At), Cell.Word(row.Reductant.Id), Cell.Word(step.Reaction), Cell.Of(step.Margin / 1000, 1), Cell.Of(step.ExpandedUncertainty / 1000, 1), Cell.Word(RankWords.Of(step.Verdict)),
             ])))]);
+    }
+
+    private static IEnumerable<AnswerTable> SampleTables(ImmutableArray<RankResult> results, TemperatureColumns temperatures)
+    {
+        if (results.Any(result => result.Rows.Any(row => row.ProbabilityReduces is not null)))
+        {
+            yield return new AnswerTable(
+                "From sampled errors of the data: probability that it reduces, percentiles of the first crossover",
+                [.. temperatures.Columns, new Column("reductant", "reductant", false), new Column("reduces\n%", "probability_reduces_percent"), new Column("5 %\nC", "crossover_p05_C"), new Column("50 %\nC", "crossover_p50_C"), new Column("95 %\nC", "crossover_p95_C")],
+                [.. results.SelectMany(result => result.Rows.Where(row => row.ProbabilityReduces is not null).Select(row => (IReadOnlyList<Cell>)[
+                    .. temperatures.Cells(result.At), Cell.Word(row.Reductant.Id), Cell.Of(100 * row.ProbabilityReduces, 2),
+                    .. Enumerable.Range(0, 3).Select(i => Cell.Of(row.CrossoverPercentiles.Length > i ? row.CrossoverPercentiles[i] - 273.15 : null, 0)),
+                ]))]);
+        }
     }
 }

@@ -25,6 +25,19 @@ internal static class RankCommand
             SubstanceDatabase database = common.Database(parsed);
             TemperatureSeries series = TemperatureSeries.Parse(parsed.GetValue(options.At)!, "--at");
             ImmutableArray<RankResult> results = [.. options.Requests(parsed, series, database).SelectMany(request => ReductantRanking.Rank(request, database))];
+            if (parsed.GetValue(options.Uncertainty) is { } sampling)
+            {
+                int draws = RankSampling.Parse(sampling);
+                long start = System.Diagnostics.Stopwatch.GetTimestamp();
+                results = [.. results.Select(result => RankSampling.Of(result, draws, database, stage =>
+                {
+                    if (System.Diagnostics.Stopwatch.GetElapsedTime(start).TotalSeconds > 0.5)
+                    {
+                        screen.Error.WriteLine($"redoxfurnace: {stage} ...");
+                    }
+                }))];
+            }
+
             Answer answer = RankPresenter.Present(results, series.Unit, parsed.GetValue(options.Steps), common.UsUnits(parsed), database);
             return screen.Show(answer, common.Form(parsed));
         });
@@ -38,6 +51,8 @@ internal static class RankCommand
         public Option<string> At { get; } = new("--at") { Description = "temperatures: 1400C, 700C,800C or 800C..1200C/50C", Required = true, HelpName = "T" };
 
         public Option<bool> Steps { get; } = new("--steps") { Description = "show each step of the oxide's ladder" };
+
+        public Option<string> Uncertainty { get; } = new("--uncertainty") { Description = "sample=10000: draw errors with their covariance; probability of each verdict, percentiles of crossovers", HelpName = "sample=N" };
 
         private Option<string> Metal { get; } = new("--metal") { Description = "the metal wanted from an oxide of several (each in turn)", HelpName = "ELEMENT" };
 
@@ -57,7 +72,7 @@ internal static class RankCommand
 
         private Option<string> Nitrogen { get; } = new("--nitrogen") { Description = "nitrogen pressure, to look for nitrides", HelpName = "P" };
 
-        public IEnumerable<Option> All => [At, With, Metal, By, Activity, Pressure, Monoxide, GasRatio, Frost, Nitrogen, Steps];
+        public IEnumerable<Option> All => [At, With, Metal, By, Activity, Pressure, Monoxide, GasRatio, Frost, Nitrogen, Uncertainty, Steps];
 
         public IEnumerable<RankRequest> Requests(ParseResult parsed, TemperatureSeries series, SubstanceDatabase database)
         {

@@ -51,7 +51,8 @@ public static class ReactionUncertainty
     public static IReadOnlyList<string> ClassDefaulted(Reaction reaction)
         => [.. reaction.Terms.Where(term => term.Substance.Uncertainty.EnthalpyIsClassDefault && term.Substance.Uncertainty.EnthalpyJoules > 0).Select(term => term.Substance.Id)];
 
-    private static (List<(Substance Substance, double Number)> Substances, List<(ReactionLine Line, double Number)> Lines) Expand(Reaction reaction, double kelvin)
+    /// <summary>The substances and reaction lines whose errors a reaction feels, with their numbers.</summary>
+    internal static (List<(Substance Substance, double Number)> Substances, List<(ReactionLine Line, double Number)> Lines) Expand(Reaction reaction, double kelvin)
     {
         List<(Substance Substance, double Number)> substances = [];
         List<(ReactionLine Line, double Number)> lines = [];

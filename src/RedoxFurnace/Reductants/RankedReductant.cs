@@ -85,4 +85,10 @@ public sealed record RankedReductant
 
     /// <summary>Further remarks.</summary>
     public ImmutableArray<string> Notes { get; init; } = [];
+
+    /// <summary>Probability, 0 to 1, that it reduces, from sampled errors; null unless asked for.</summary>
+    public double? ProbabilityReduces { get; init; }
+
+    /// <summary>5th, 50th and 95th percentile of the first crossover, K, from sampled errors; empty unless asked for or where fewer than nineteen of twenty samples have one.</summary>
+    public ImmutableArray<double> CrossoverPercentiles { get; init; } = [];
 }

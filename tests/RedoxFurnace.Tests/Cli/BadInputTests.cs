@@ -142,6 +142,8 @@ public class BadInputTests
     [InlineData("rnk Cr2O3 --at 1400C", "'rnk'", "did you mean 'rank'?")]
     [InlineData("rank Cr2O3 --at 1400C --wth C", "'--wth'", "did you mean '--with'?")]
     [InlineData("rank Cr2O3 --at 1400C --by price", "'price'", "margin, crossover, mass, heat")]
+    [InlineData("rank Cr2O3 --at 1400C --uncertainty smple=10", "'smple=10'", "sample=10000")]
+    [InlineData("rank Cr2O3 --at 1400C --uncertainty sample=3", "'sample=3'", "100 to 200000")]
     [InlineData("rank Cr2O3 --at 1400C --units uk", "'uk'", "did you mean 'us'?")]
     [InlineData("rank Cr2O3 --at 1400C --json --csv", "exclude each other")]
     [InlineData("rank Cr2O3", "needs --at")]

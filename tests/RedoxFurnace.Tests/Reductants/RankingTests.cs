@@ -137,6 +137,25 @@ public class RankingTests
         Assert.Equal(chromia - alumina, Row("Cr2O3", kelvin, "Al").Margin!.Value, 1e-6);
     }
 
+    /// <summary>Sampled errors against linear propagation where that holds: the share that reduces is the normal integral of margin over standard error, and half the draws cross below the crossover.</summary>
+    [Theory]
+    [InlineData("Cr2O3", 1240, "C")]
+    [InlineData("MnO", 1400, "C")]
+    [InlineData("Cr2O3", 1600, "H2")]
+    [InlineData("Fe2O3", 690, "C")]
+    public void Sampling_agrees_with_linear_propagation(string oxide, double celsius, string reductant)
+    {
+        RankResult plain = Rank(oxide, celsius + Zero, [reductant]);
+        RankedReductant row = RankSampling.Of(plain, 20_000, SubstanceDatabase.Bundled).Rows.Single();
+        double expected = MathNet.Numerics.Distributions.Normal.CDF(0, row.ExpandedUncertainty!.Value / 2, row.Margin!.Value);
+        Assert.Equal(expected, row.ProbabilityReduces!.Value, 0.015);
+        Assert.Equal(row.Crossovers!.Kelvin.Min(), row.CrossoverPercentiles[1], 2.0);
+        Assert.True(row.CrossoverPercentiles[0] < row.CrossoverPercentiles[1] && row.CrossoverPercentiles[1] < row.CrossoverPercentiles[2]);
+        RankedReductant again = RankSampling.Of(plain, 20_000, SubstanceDatabase.Bundled).Rows.Single();
+        Assert.Equal(row.ProbabilityReduces, again.ProbabilityReduces);
+        Assert.Equal(row.CrossoverPercentiles.AsEnumerable(), again.CrossoverPercentiles);
+    }
+
     /// <summary>The table of many margins is the ranking's own, oxide by oxide, at cold and hot ends and past the data.</summary>
     [Fact]
     public void The_table_of_margins_holds_the_margins_of_the_ranking()
