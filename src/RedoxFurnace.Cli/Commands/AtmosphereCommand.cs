@@ -20,7 +20,8 @@ internal static class AtmosphereCommand
         Option<string> hydrogen = new("--hydrogen") { Description = "share of hydrogen in the gas (100%)", HelpName = "SHARE" };
         Option<string> pressure = new("--pressure") { Description = "total pressure (1 bar)", HelpName = "P" };
         Option<string> metal = new("--metal") { Description = "the metal meant in an oxide of several", HelpName = "ELEMENT" };
-        Command command = new("atmosphere", "the gas in balance with an oxide: pO2, CO/CO2, H2/H2O, frost point, probe millivolts") { oxide, at, activity, hydrogen, pressure, metal };
+        Option<string> uncertainty = new("--uncertainty") { Description = "sample=10000: percentiles from errors drawn with their covariance", HelpName = "sample=N" };
+        Command command = new("atmosphere", "the gas in balance with an oxide: pO2, CO/CO2, H2/H2O, frost point, probe millivolts") { oxide, at, activity, hydrogen, pressure, metal, uncertainty };
         command.SetAction(parsed =>
         {
             SubstanceDatabase database = common.Database(parsed);
@@ -30,7 +31,10 @@ internal static class AtmosphereCommand
                 TemperatureSeries.Parse(parsed.GetValue(at)!, "--at"),
                 Activities.Parse(parsed.GetValue(activity), database),
                 parsed.GetValue(hydrogen) is { } share ? Share.Parse(share, "--hydrogen") : 1,
-                parsed.GetValue(pressure) is { } total ? Pressure.Parse(total, "--pressure") : Pressure.Standard);
+                parsed.GetValue(pressure) is { } total ? Pressure.Parse(total, "--pressure") : Pressure.Standard)
+            {
+                Draws = parsed.GetValue(uncertainty) is { } draws ? Reductants.RankSampling.Parse(draws) : null,
+            };
             AtmosphereResult result = AtmosphereWindow.Of(request, database);
             return screen.Show(Present(result, common.UsUnits(parsed), database), common.Form(parsed));
         });
@@ -51,7 +55,7 @@ internal static class AtmosphereCommand
         return new Answer
         {
             Headline = char.ToUpperInvariant(result.Headline[0]) + result.Headline[1..],
-            Tables = [Table(result, us)],
+            Tables = [Table(result, us), .. result.Request.Draws is null ? Array.Empty<AnswerTable>() : [Percentiles(result)]],
             Notes = result.Notes,
             Assumptions = result.Assumptions,
             Hazards = hazards,
@@ -91,6 +95,18 @@ internal static class AtmosphereCommand
             ])]);
     }
 
+    private static AnswerTable Percentiles(AtmosphereResult result) => new(
+        "From sampled errors of the data: 5, 50 and 95 %",
+        [
+            new Column("T C", "temperature_C"), new Column("couple", "couple", false), new Column("log10 pO2\n5 %", "log10_pO2_p05"), new Column("50 %", "log10_pO2_p50"), new Column("95 %", "log10_pO2_p95"),
+            new Column("frost or dew C\n5 %", "frost_p05_C"), new Column("50 %", "frost_p50_C"), new Column("95 %", "frost_p95_C"),
+        ],
+        [.. result.Rows.Where(row => !row.Log10OxygenPercentiles.IsEmpty).Select(row => (IReadOnlyList<Cell>)[
+            Cell.Of(row.Kelvin - PhysicalConstants.ZeroCelsiusInKelvin, 1), Cell.Word(row.Couple),
+            .. row.Log10OxygenPercentiles.Select(value => Cell.Of(value, 2)),
+            .. Enumerable.Range(0, 3).Select(i => Cell.Of(row.FrostPercentiles.Length > i ? Celsius(row.FrostPercentiles[i]) : null, 1)),
+        ])]);
+
     private static double? Power(double? log10) => log10 is { } value ? Math.Pow(10, value) : null;
 
     private static double? Celsius(double? kelvin) => kelvin - PhysicalConstants.ZeroCelsiusInKelvin;
@@ -127,11 +143,24 @@ internal static class AtmosphereCommand
             writer.Number("probe_mV", row.ProbeMillivolts);
             writer.Number("probe_uncertainty_mV", row.ProbeUncertaintyMillivolts);
             writer.Number("decomposition_V", row.DecompositionVolts);
+            Numbers(writer, "log10_pO2_percentiles", row.Log10OxygenPercentiles);
+            Numbers(writer, "frost_point_percentiles_C", row.FrostPercentiles.Select(kelvin => kelvin - PhysicalConstants.ZeroCelsiusInKelvin));
             writer.WriteEndObject();
         }
 
         writer.WriteEndArray();
         writer.Common(result.Assumptions, sources, result.DataRange, result.Notes, [], hazards);
         writer.WriteEndObject();
+    }
+
+    private static void Numbers(Utf8JsonWriter writer, string key, IEnumerable<double> values)
+    {
+        writer.WriteStartArray(key);
+        foreach (double value in values)
+        {
+            writer.WriteNumberValue(value);
+        }
+
+        writer.WriteEndArray();
     }
 }

@@ -10,4 +10,8 @@ namespace RedoxFurnace.Atmospheres;
 /// <param name="Activities">Of condensed phases.</param>
 /// <param name="HydrogenShare">Share of hydrogen in the gas, above 0, at most 1.</param>
 /// <param name="Total">Total pressure.</param>
-public sealed record AtmosphereRequest(string Oxide, string? Metal, TemperatureSeries At, Activities Activities, double HydrogenShare, Pressure Total);
+public sealed record AtmosphereRequest(string Oxide, string? Metal, TemperatureSeries At, Activities Activities, double HydrogenShare, Pressure Total)
+{
+    /// <summary>Draws of the errors of the data for percentiles; null for none.</summary>
+    public int? Draws { get; init; }
+}

@@ -1,3 +1,5 @@
+using System.Collections.Immutable;
+
 namespace RedoxFurnace.Atmospheres;
 
 /// <summary>The gas that stands in balance with one couple at one temperature; drier or more reducing gas takes the oxygen off, wetter gas oxidises.</summary>
@@ -39,4 +41,11 @@ public sealed record AtmosphereRow(
     double? WaterPpm,
     double? ProbeMillivolts,
     double? ProbeUncertaintyMillivolts,
-    double? DecompositionVolts);
+    double? DecompositionVolts)
+{
+    /// <summary>5th, 50th and 95th percentile of log10(pO2/bar) from sampled errors; empty unless asked for.</summary>
+    public ImmutableArray<double> Log10OxygenPercentiles { get; init; } = [];
+
+    /// <summary>5th, 50th and 95th percentile of the highest frost or dew point, K, from sampled errors; empty unless asked for or where there is none.</summary>
+    public ImmutableArray<double> FrostPercentiles { get; init; } = [];
+}

@@ -9,6 +9,10 @@ namespace RedoxFurnace.Atmospheres;
 /// <remarks>THEORY.md, section 6.</remarks>
 public static class AtmosphereWindow
 {
+    private const int Seed = 20_260_802;
+
+    private static readonly double[] Shares = [0.05, 0.5, 0.95];
+
     /// <summary>Rows for each temperature and each step of the oxide down to the metal.</summary>
     /// <param name="request">What is asked.</param>
     /// <param name="database">Data.</param>
@@ -26,6 +30,7 @@ public static class AtmosphereWindow
 
         OxidePath path = new(oxide, metal, database, request.Activities);
         GasReactions gases = new(database);
+        ErrorSample? sample = request.Draws is { } draws ? new ErrorSample(draws, Seed, database.Covariance) : null;
         List<AtmosphereRow> rows = [];
         List<string> notes = [];
         HashSet<Substance> used = [gases.Hydrogen, gases.Water, gases.CarbonMonoxide, gases.CarbonDioxide];
@@ -41,7 +46,8 @@ public static class AtmosphereWindow
 
                 foreach (LadderStep step in descent.Steps)
                 {
-                    rows.Add(Row(step, ReferenceEquals(step, descent.Hardest), at.Kelvin, request, gases, database.Covariance));
+                    AtmosphereRow row = Row(step, ReferenceEquals(step, descent.Hardest), at.Kelvin, request, gases, database.Covariance);
+                    rows.Add(sample is null ? row : Sampled(row, step, gases, sample));
                     used.UnionWith(step.Couple.Formation.Terms.Select(term => term.Substance));
                     notes.AddRange(step.Gap is { } gap ? [gap] : []);
                 }
@@ -120,6 +126,34 @@ public static class AtmosphereWindow
             OxygenPotentialReadings.ProbeMillivolts(potential, kelvin),
             1000 * expanded / (4 * PhysicalConstants.Faraday),
             OxygenPotentialReadings.DecompositionVolts(step.StandardGibbs));
+    }
+
+    private static AtmosphereRow Sampled(AtmosphereRow row, LadderStep step, GasReactions gases, ErrorSample sample)
+    {
+        if (row.OxygenPotential is not { } potential)
+        {
+            return row;
+        }
+
+        double kelvin = row.Kelvin;
+        double rt = PhysicalConstants.GasConstant * kelvin;
+        double[] oxygen = new double[sample.Draws];
+        Array.Fill(oxygen, potential);
+        sample.Add(step.Couple.Formation, kelvin, 1, oxygen);
+        Array.Sort(oxygen);
+        // ln of the water allowed is a constant less ln(H2/H2O), which is half the Gibbs energy between gas and couple over RT.
+        double[] water = new double[sample.Draws];
+        sample.Add(step.Couple.Formation.Times(-1).Plus(1, gases.HydrogenOxidation, 1), kelvin, -1 / (2 * rt), water);
+        Array.Sort(water);
+        double? logWater = row.FrostKelvin is null ? null : row.FrostKelvin < WaterVapour.TriplePointKelvin ? WaterVapour.LogSaturationPressureOverIce(row.FrostKelvin.Value) : WaterVapour.LogSaturationPressureOverLiquid(row.FrostKelvin.Value);
+        double?[] frost = logWater is { } log ? [.. Shares.Select(share => FrostOrDew(log + At(water, share)))] : [];
+        return row with
+        {
+            Log10OxygenPercentiles = [.. Shares.Select(share => OxygenPotentialReadings.Log10Bar(At(oxygen, share), kelvin))],
+            FrostPercentiles = frost.Length > 0 && frost.All(value => value is not null) ? [.. frost.Select(value => value!.Value)] : [],
+        };
+
+        static double At(double[] sorted, double share) => sorted[(int)Math.Round(share * (sorted.Length - 1))];
     }
 
     private static double? FrostOrDew(double logWater)

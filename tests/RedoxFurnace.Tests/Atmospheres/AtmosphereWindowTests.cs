@@ -63,6 +63,19 @@ public class AtmosphereWindowTests
         Assert.Equal(0.3, part.GetProperty("water_ppm_max").GetDouble() / whole.GetProperty("water_ppm_max").GetDouble(), 1e-3);
     }
 
+    /// <summary>Sampled percentiles are those of a normal error: 1.645 standard errors each way, half the expanded uncertainty each.</summary>
+    [Fact]
+    public void Sampled_percentiles_agree_with_linear_propagation()
+    {
+        JsonElement row = Row("atmosphere Cr2O3 --at 1000C --uncertainty sample=40000 --json");
+        double[] oxygen = [.. row.GetProperty("log10_pO2_percentiles").EnumerateArray().Select(value => value.GetDouble())];
+        double standard = row.GetProperty("log10_pO2_uncertainty").GetDouble() / 2;
+        Assert.Equal(row.GetProperty("log10_pO2_bar").GetDouble(), oxygen[1], 0.05 * standard);
+        Assert.Equal(1.645 * standard, oxygen[2] - oxygen[1], 0.06 * standard);
+        double[] frost = [.. row.GetProperty("frost_point_percentiles_C").EnumerateArray().Select(value => value.GetDouble())];
+        Assert.Equal(2 * 1.645 * row.GetProperty("frost_point_uncertainty_C").GetDouble() / 2, frost[2] - frost[0], 0.08);
+    }
+
     private static JsonElement Row(string line) => ProgramRun.Of(line).Json().GetProperty("rows").EnumerateArray().First(row => row.GetProperty("hardest").GetBoolean());
 
     private static double Number(string text) => double.Parse(text, CultureInfo.InvariantCulture);
