@@ -70,9 +70,11 @@ internal static class RankCommand
 
         private Option<string> Frost { get; } = new("--frost") { Description = "frost point of the hydrogen at the total pressure, in place of its ratio", HelpName = "T" };
 
+        private Option<string> Flux { get; } = new("--flux") { Description = "a flux charged in excess, such as CaO: what the whole charge becomes counts it", HelpName = "FORMULA" };
+
         private Option<string> Nitrogen { get; } = new("--nitrogen") { Description = "nitrogen pressure, to look for nitrides", HelpName = "P" };
 
-        public IEnumerable<Option> All => [At, With, Metal, By, Activity, Pressure, Monoxide, GasRatio, Frost, Nitrogen, Uncertainty, Steps];
+        public IEnumerable<Option> All => [At, With, Metal, By, Activity, Pressure, Monoxide, GasRatio, Frost, Nitrogen, Flux, Uncertainty, Steps];
 
         public IEnumerable<RankRequest> Requests(ParseResult parsed, TemperatureSeries series, SubstanceDatabase database)
         {
@@ -99,6 +101,7 @@ internal static class RankCommand
                     GasRatio = ratio,
                     Monoxide = parsed.GetValue(Monoxide) is { } pco ? Quantities.Pressure.Parse(pco, "--pco") : null,
                     Nitrogen = parsed.GetValue(Nitrogen) is { } nitrogen ? Quantities.Pressure.Parse(nitrogen, "--nitrogen") : null,
+                    Flux = parsed.GetValue(Flux) is { } flux ? database.Get(flux).Id : null,
                     Activities = Activities.Parse(parsed.GetValue(Activity), database),
                 }
                 : throw new RequestException($"--gas-ratio '{parsed.GetValue(GasRatio)}' is out of range; a ratio must be above 0");

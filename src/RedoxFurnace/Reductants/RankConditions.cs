@@ -24,6 +24,9 @@ public sealed record RankConditions
     /// <summary>Nitrogen pressure, or null without nitrogen.</summary>
     public Pressure? Nitrogen { get; init; }
 
+    /// <summary>A flux charged in excess, formula, or null.</summary>
+    public string? Flux { get; init; }
+
     /// <summary>Activities of condensed phases.</summary>
     public Activities Activities { get; init; } = Activities.AllOne;
 

@@ -44,7 +44,7 @@ public static class ReductantRanking
         double kelvin = request.At.Kelvin;
         OxideDescent descent = charge.At(kelvin, request.Conditions.Total?.NaturalLogBar ?? 0);
         RowBuilder builder = new(charge, request.Conditions, database, kelvin);
-        ImmutableArray<RankedReductant> rows = RankSorting.Sort([.. reductants.Select(builder.Build)], request.Order);
+        ImmutableArray<RankedReductant> rows = RankSorting.Sort([.. reductants.Select(builder.Build).Select(row => ChargeOutcome.Judge(row, oxide, metal, kelvin, request.Conditions, database))], request.Order);
         LadderStep hardest = descent.Hardest;
         return new RankResult
         {

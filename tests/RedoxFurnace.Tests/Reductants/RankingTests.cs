@@ -137,6 +137,29 @@ public class RankingTests
         Assert.Equal(chromia - alumina, Row("Cr2O3", kelvin, "Al").Margin!.Value, 1e-6);
     }
 
+    /// <summary>Without lime part of the magnesium stays as forsterite, with it none (scenario of silicothermic magnesium; common practice, no source).</summary>
+    [Fact]
+    public void What_the_charge_becomes_is_told_and_lime_frees_the_magnesium()
+    {
+        RankConditions vacuum = new() { Total = Pressure.FromBar(1e-4) };
+        RankedReductant plain = Row("MgO", 1200 + Zero, "Si", vacuum);
+        Assert.Contains(plain.Notes, note => note.Contains("whole charge", StringComparison.Ordinal) && note.Contains("Mg2SiO4", StringComparison.Ordinal));
+        RankedReductant limed = Row("MgO", 1200 + Zero, "Si", vacuum with { Flux = "CaO" });
+        Assert.Contains(limed.Notes, note => note.Contains("100 % of the Mg as vapour", StringComparison.Ordinal));
+    }
+
+    /// <summary>A carbide of calcium or silicon takes the oxygen and leaves its carbon: chromium carbide, not chromium, below the metal's own floor.</summary>
+    [Theory]
+    [InlineData("CaC2")]
+    [InlineData("SiC")]
+    public void A_reductant_that_brings_carbon_makes_carbide_and_the_job_does_not_work(string reductant)
+    {
+        RankedReductant row = Row("Cr2O3", 1400 + Zero, reductant);
+        Assert.Equal(Verdict.Reduces, row.Verdict);
+        Assert.Equal(JobVerdict.DoesNotWork, row.Job);
+        Assert.Contains("Cr7C3", row.Reason, StringComparison.Ordinal);
+    }
+
     /// <summary>Sampled errors against linear propagation where that holds: the share that reduces is the normal integral of margin over standard error, and half the draws cross below the crossover.</summary>
     [Theory]
     [InlineData("Cr2O3", 1240, "C")]
