@@ -16,7 +16,7 @@ internal static class RankHazards
         List<HazardNote> notes = [];
         foreach (RankResult result in results)
         {
-            RankedReductant[] used = [.. result.Rows.Where(row => named || row.Job is JobVerdict.Works or JobVerdict.WorksIf)];
+            RankedReductant[] used = [.. result.Rows.Where(row => named || row.Verdict is Verdict.Reduces or Verdict.Borderline)];
             HazardWork work = new()
             {
                 Charge = [result.Oxide],

@@ -34,7 +34,7 @@ internal static class MarginDrawing
         ImmutableArray<HazardNote> hazards = ChartDrawing.Hazards(database, new HazardWork
         {
             Charge = [results[0].Oxide],
-            Reductants = [.. results[0].Rows.Where(row => row.Job is JobVerdict.Works or JobVerdict.WorksIf).Select(row => row.Reductant.Id)],
+            Reductants = [.. results[0].Rows.Where(row => row.Verdict is Verdict.Reduces or Verdict.Borderline).Select(row => row.Reductant.Id)],
             Products = [.. results.Select(result => result.Metal)],
             LowestKelvin = at.Kelvin,
             HighestKelvin = at.Kelvin,
